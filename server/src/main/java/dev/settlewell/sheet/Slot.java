@@ -29,12 +29,12 @@ public sealed interface Slot<T> {
   /** The key is there, and what it says cannot be taken as written. */
   record Wrong<T>(Place place, String raw, String pointer) implements Slot<T> {}
 
-  default Optional<T> value() {
+  default Optional<T> stated() {
     return this instanceof Stated<T> stated ? Optional.of(stated.value()) : Optional.empty();
   }
 
   default T orElse(T other) {
-    return value().orElse(other);
+    return stated().orElse(other);
   }
 
   default boolean isStated() {
