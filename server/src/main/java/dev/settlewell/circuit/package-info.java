@@ -1,0 +1,8 @@
+/**
+ * Linear circuits between a sensor and the hold capacitor of a converter.
+ *
+ * <p>A path is a chain of two-ports. What is passive after the last amplifier is a {@link
+ * dev.settlewell.circuit.Ladder}; {@link dev.settlewell.circuit.Settling} samples it. Everything
+ * here is in SI units and knows nothing of sheets, files or units of measure.
+ */
+package dev.settlewell.circuit;
