@@ -17,6 +17,22 @@ import java.util.Map;
  * <p>Asking for a key that the part's own schema does not know, or as another type than its form
  * gives, is a mistake in the program and throws; a text can never cause it.
  *
+ * <p>Shapes worth knowing, each the same however the sheet spells it:
+ *
+ * <ul>
+ *   <li>{@code resistor}, {@code capacitor}, {@code pull-down}, {@code shunt}, {@code beta}: the
+ *       value with its errors is {@code quantity("value")}, in the short and the long form alike.
+ *   <li>{@code channel.part("band")}: {@code frequency}, {@code amplitude}.
+ *   <li>{@code channel.list("interferers", Part.class)}: parts of kind {@code coupling} with {@code
+ *       text("interferer")} and, where this sensor has its own, {@code quantity("amplitude")}. An
+ *       empty list is stated ("none, and meant"), which is not the same as missing.
+ *   <li>{@code channel.part("calibrated")}: kind {@code calibration}; {@code [offset, gain]} is
+ *       {@code list("terms", String.class)}.
+ *   <li>{@code table.list("points", Part.class)}: kind {@code point} with {@code measured}, {@code
+ *       output}.
+ *   <li>{@code interferer.map("harmonics", Toleranced.class)}: keys {@code "2"}, {@code "3"}.
+ * </ul>
+ *
  * @param kind the schema's name of this mapping: {@code converter}, {@code resistor}
  * @param keyPlace the key that introduced it
  * @param place the whole value
@@ -76,8 +92,32 @@ public record Part(
     return as(key, Boolean.class);
   }
 
+  /**
+   * A quantity, or one of a few words or a name: every key of form {@code quantity} with {@code
+   * x-words} or {@code x-refers-to}: {@code reference}, {@code reference-low}, {@code
+   * hold-starts-at}, {@code rate}, {@code acquisition}.
+   */
+  public Slot<Either> either(String key) {
+    return as(key, Either.class);
+  }
+
+  /**
+   * Form {@code part}: one mapping of a known kind, whatever short form it was written in. Form
+   * {@code one-kind} ({@code sensor}, the items of {@code path}): the part named by its one key,
+   * {@code part("sensor")} is a part of kind {@code thermistor}.
+   */
   public Slot<Part> part(String key) {
     return as(key, Part.class);
+  }
+
+  /** Form {@code map}: the user's names, or numbers without leading zeros, to what stands there. */
+  @SuppressWarnings("unchecked")
+  public <T> Slot<Map<String, Slot<T>>> map(String key, Class<T> item) {
+    Slot<?> slot = slot(key);
+    if (slot instanceof Slot.Stated<?> stated) {
+      requireItems(key, ((Map<?, ?>) stated.value()).values(), item);
+    }
+    return (Slot<Map<String, Slot<T>>>) slot;
   }
 
   /** A list; each item a slot of its own, so that one wrong item costs only itself. */
@@ -85,13 +125,17 @@ public record Part(
   public <T> Slot<List<Slot<T>>> list(String key, Class<T> item) {
     Slot<?> slot = slot(key);
     if (slot instanceof Slot.Stated<?> stated) {
-      for (Object element : (List<?>) stated.value()) {
-        if (element instanceof Slot.Stated<?> e && !item.isInstance(e.value())) {
-          throw new IllegalArgumentException(key + " in " + kind + " does not list " + item);
-        }
-      }
+      requireItems(key, (List<?>) stated.value(), item);
     }
     return (Slot<List<Slot<T>>>) slot;
+  }
+
+  private void requireItems(String key, Iterable<?> slots, Class<?> item) {
+    for (Object element : slots) {
+      if (element instanceof Slot.Stated<?> e && !item.isInstance(e.value())) {
+        throw new IllegalArgumentException(key + " in " + kind + " does not hold " + item);
+      }
+    }
   }
 
   @SuppressWarnings("unchecked")
