@@ -27,7 +27,9 @@ public sealed interface Drive {
   record ClosedLoop(double outputOhms, double hertz) implements Drive {
     public ClosedLoop {
       Values.requireFinite("output resistance", outputOhms);
-      Values.requireNotNegative("closed-loop bandwidth", hertz);
+      if (!(hertz > 0)) {
+        throw new IllegalArgumentException("closed-loop bandwidth must be more than 0, not " + hertz);
+      }
     }
   }
 }
