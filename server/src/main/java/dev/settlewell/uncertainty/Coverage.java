@@ -28,10 +28,11 @@ public final class Coverage {
    * The half width U with P(|X| &lt;= U) = p of the sum X of independent contributions.
    *
    * <p>Rows with infinite degrees of freedom: from the distribution of the sum (see {@link
-   * SymmetricSum}), exact but for the numerics, some 1e-7 of U. With type A rows: they enter that
-   * distribution as normal ones, and U is widened by t_p(ν_eff) / t_p(∞), ν_eff after {@link
-   * #effectiveDegreesOfFreedom} and cut to the next lower whole number (JCGM 100:2008, G.4.1 and
-   * G.6.4). So type A and normal rows alone give t_p(ν_eff) u_c, as G.4 has it.
+   * SymmetricSum}), exact but for the numerics: P is met within 5e-7, or 5e-6 where a sine
+   * dominates. With type A rows: they enter that distribution as normal ones, and U is widened by
+   * t_p(ν_eff) / t_p(∞), ν_eff after {@link #effectiveDegreesOfFreedom} and cut to the next lower
+   * whole number (JCGM 100:2008, G.4.1 and G.6.4). So type A and normal rows alone give t_p(ν_eff)
+   * u_c, as G.4 has it.
    *
    * @param probability p, above 0 and below 1
    * @return 0 without rows; never more than the sum of the hard limits
