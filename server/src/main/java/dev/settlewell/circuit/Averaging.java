@@ -1,6 +1,15 @@
 package dev.settlewell.circuit;
 
+import java.util.OptionalInt;
+import java.util.function.DoubleUnaryOperator;
+import java.util.stream.IntStream;
 import org.apache.commons.math3.analysis.solvers.BrentSolver;
+import org.apache.commons.math3.optim.MaxEval;
+import org.apache.commons.math3.optim.nonlinear.scalar.GoalType;
+import org.apache.commons.math3.optim.univariate.BrentOptimizer;
+import org.apache.commons.math3.optim.univariate.SearchInterval;
+import org.apache.commons.math3.optim.univariate.UnivariateObjectiveFunction;
+import org.apache.commons.math3.optim.univariate.UnivariatePointValuePair;
 import org.apache.commons.math3.util.FastMath;
 
 /**
@@ -12,6 +21,11 @@ import org.apache.commons.math3.util.FastMath;
  * filters relative to its own rate only.
  */
 public final class Averaging {
+  /** Multiples of the scan rate within which uneven visits are searched for their worst gain. */
+  private static final int WIDEST_SEARCH = 8;
+
+  private static final int POINTS_A_TURN = 24;
+
   private Averaging() {}
 
   /**
@@ -74,6 +88,122 @@ public final class Averaging {
       }
     }
     return worst;
+  }
+
+  /**
+   * The smallest count whose {@link #worstEvenGain} over these spans is at most {@code gain}; empty
+   * where no count up to {@code largestCount} reaches it, as always where a multiple of the rate
+   * lies inside.
+   */
+  public static OptionalInt countFor(
+      double gain,
+      double lowHertz,
+      double highHertz,
+      double lowRate,
+      double highRate,
+      int largestCount) {
+    if (Math.ceil(lowHertz / highRate) <= highHertz / lowRate) {
+      return OptionalInt.empty();
+    }
+    return IntStream.rangeClosed(1, largestCount)
+        .filter(n -> worstEvenGain(lowHertz, highHertz, lowRate, highRate, n) <= gain)
+        .findFirst();
+  }
+
+  /**
+   * The largest {@link #gain} of a mean over whole scans that visit the channel at uneven instants.
+   *
+   * <p>The gain is that of one scan's visits times {@link #evenGain} over the scans, both functions
+   * of {@code x = f/f_s}. Evenly spread visits are {@link #worstEvenGain} at their own rate. Else
+   * the sum is limited in how fast it can turn (Bernstein's inequality), so that {@value
+   * #POINTS_A_TURN} points a turn miss its highest lobe by less than 1 %; over a span of more than
+   * {@value #WIDEST_SEARCH} multiples of the scan rate the answer is the bound 1, which some
+   * multiple comes near.
+   *
+   * @param phases of the visits within one scan, as shares of its period from 0 to 1, rising
+   * @param scans in one mean
+   */
+  public static double worstGain(
+      double lowHertz,
+      double highHertz,
+      double lowRate,
+      double highRate,
+      double[] phases,
+      int scans) {
+    int visits = phases.length;
+    if (areEven(phases)) {
+      return worstEvenGain(
+          lowHertz, highHertz, visits * lowRate, visits * highRate, visits * scans);
+    }
+    double low = lowHertz / highRate;
+    double high = highHertz / lowRate;
+    if (high - low > WIDEST_SEARCH) {
+      return 1;
+    }
+    DoubleUnaryOperator gain = x -> gain(x, phases) * kernel(x, scans);
+    if (low == high) {
+      return gain.applyAsDouble(low);
+    }
+    double step = 1.0 / (POINTS_A_TURN * scans);
+    double best = high;
+    for (double x = low; x < high; x += step) {
+      best = gain.applyAsDouble(x) > gain.applyAsDouble(best) ? x : best;
+    }
+    UnivariatePointValuePair peak =
+        new BrentOptimizer(1e-10, 1e-14)
+            .optimize(
+                new MaxEval(200),
+                GoalType.MAXIMIZE,
+                new UnivariateObjectiveFunction(gain::applyAsDouble),
+                new SearchInterval(Math.max(low, best - step), Math.min(high, best + step), best));
+    return Math.max(peak.getValue(), gain.applyAsDouble(best));
+  }
+
+  private static boolean areEven(double[] phases) {
+    for (int i = 1; i < phases.length; i++) {
+      if (Math.abs(phases[i] - phases[0] - (double) i / phases.length) > 1e-9) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  /**
+   * Gain of an exponential average, {@code y += share (x - y)} at each sample: {@code a / |1 -
+   * (1-a) exp(-j 2 pi f/f_s)|}.
+   *
+   * @param share of the newest sample, above 0 and at most 1
+   */
+  public static double exponentialGain(double hertz, double rate, double share) {
+    double turns = StrictMath.IEEEremainder(hertz, rate) / rate;
+    double half = FastMath.sin(FastMath.PI * turns);
+    // |1 - q e^-jw|^2 = (1 - q)^2 + 4 q sin^2(w/2): no digits lost for small shares.
+    return share / Math.sqrt(share * share + 4 * (1 - share) * half * half);
+  }
+
+  /** RMS of white noise behind an exponential average over that before it: sqrt(a/(2 - a)). */
+  public static double exponentialNoise(double share) {
+    return Math.sqrt(share / (2 - share));
+  }
+
+  /**
+   * RMS of low-pass noise behind the mean of evenly spaced samples over that before it: {@code
+   * 1/sqrt(M)} where the noise forgets itself between two samples, 1 where it does not move.
+   *
+   * <p>Noise of the bandwidth B through one pole has the autocorrelation {@code exp(-4 B |t|)};
+   * more poles are taken as one of the same noise bandwidth.
+   *
+   * @param noiseBandwidth in hertz; infinity is white noise
+   */
+  public static double noise(double noiseBandwidth, double rate, int count) {
+    double correlation = FastMath.exp(-4 * noiseBandwidth / rate);
+    double sum = count;
+    double power = 1;
+    for (int lag = 1; lag < count && power > 1e-17; lag++) {
+      power *= correlation;
+      sum += 2 * (count - lag) * power;
+    }
+    return Math.sqrt(sum) / count;
   }
 
   /** Where between the nulls {@code lobe/M} and {@code (lobe+1)/M} the side lobe has its peak. */

@@ -2,6 +2,8 @@ package dev.settlewell.circuit;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalInt;
+import java.util.stream.IntStream;
 import org.apache.commons.math3.analysis.solvers.BrentSolver;
 import org.apache.commons.math3.analysis.solvers.LaguerreSolver;
 import org.apache.commons.math3.complex.Complex;
@@ -79,6 +81,30 @@ public final class LowPass {
               middleIsReal(order, k, FastMath.cosh(a) * FastMath.cos(angle))));
     }
     return new LowPass(poles, edgeHertz);
+  }
+
+  /**
+   * The highest corner, in hertz, at which a Butterworth filter still weakens a line to {@code
+   * gain}: {@code f / (1/g^2 - 1)^(1/2n)}. Order 1 is one RC section.
+   *
+   * @param gain wanted at {@code hertz}, above 0 and below 1
+   */
+  public static double butterworthCorner(int order, double hertz, double gain) {
+    requireOrder(order);
+    return hertz / FastMath.pow(1 / (gain * gain) - 1, 1.0 / (2 * order));
+  }
+
+  /**
+   * The lowest order of a Butterworth filter that weakens a line to {@code gain}; empty where
+   * {@value #LARGEST_ORDER} poles do not suffice, as always below the corner for less than half
+   * power.
+   *
+   * @param gain wanted at {@code hertz}, above 0 and below 1
+   */
+  public static OptionalInt butterworthOrder(double cornerHertz, double hertz, double gain) {
+    return IntStream.rangeClosed(1, LARGEST_ORDER)
+        .filter(order -> cornerHertz <= butterworthCorner(order, hertz, gain))
+        .findFirst();
   }
 
   /** The response at a frequency in hertz. */

@@ -1,5 +1,6 @@
 package dev.settlewell.circuit;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.apache.commons.math3.util.FastMath;
 
@@ -43,6 +44,24 @@ public final class Noise {
       return 0;
     }
     return density * atDc * Math.sqrt(FrequencyResponse.noiseBandwidth(sourceOhms, chain, sampler));
+  }
+
+  /**
+   * RMS value at the hold capacitor, in V, of an amplifier's own noise: its density times the noise
+   * gain, through its pole and all that follows.
+   *
+   * @param density at the amplifier's input, V/sqrt(Hz)
+   * @param noiseGain {@code 1 + |gain|} when inverting, else the gain
+   */
+  public static double amplifier(
+      double density,
+      double noiseGain,
+      Amplifier amplifier,
+      List<? extends Element> behind,
+      Sampler sampler) {
+    List<Element> chain = new ArrayList<>(behind);
+    chain.add(0, new Amplifier(noiseGain, amplifier.poleHertz(), amplifier.outputOhms()));
+    return shaped(density, 0, chain, sampler);
   }
 
   /**

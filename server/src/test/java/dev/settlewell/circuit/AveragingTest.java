@@ -109,4 +109,98 @@ class AveragingTest {
   void wideSpanIsOneAtOnce() {
     assertThat(Averaging.worstEvenGain(342e3, 418e3, 6.25, 6.25, 16)).isEqualTo(1);
   }
+
+  /** One period of 50 Hz at 800 samples a second takes 16; half of it does for its double. */
+  @Test
+  void smallestCountThatNulls() {
+    assertThat(Averaging.countFor(1e-9, 50, 50, 800, 800, 64)).hasValue(16);
+    assertThat(Averaging.countFor(1e-9, 100, 100, 800, 800, 64)).hasValue(8);
+    // 20 ms of mains off by 1 % keep 1 %; a little less time keeps more.
+    int count = Averaging.countFor(0.0103, 49.5, 50.5, 5e3, 5e3, 200).orElseThrow();
+    assertThat(count).isBetween(99, 100);
+    assertThat(Averaging.countFor(0.5, 799, 801, 800, 800, 64)).isEmpty();
+    assertThat(Averaging.countFor(1e-9, 49.5, 50.5, 800, 800, 64)).isEmpty();
+  }
+
+  @Test
+  void worstGainOfUnevenVisitsAgainstDenseStepping() {
+    for (int seed = 0; seed < 200; seed++) {
+      Random random = new Random(seed);
+      double[] phases = {0, 0.9 * random.nextDouble()};
+      int scans = 1 + random.nextInt(12);
+      double lowRate = 100 * (1 + random.nextDouble());
+      double highRate = lowRate * (1 + (random.nextBoolean() ? 0 : 0.03 * random.nextDouble()));
+      double lowHertz = 500 * random.nextDouble();
+      double highHertz = lowHertz + (random.nextBoolean() ? 0 : 200 * random.nextDouble());
+      double worst = Averaging.worstGain(lowHertz, highHertz, lowRate, highRate, phases, scans);
+      double[] shares = new double[2 * scans];
+      for (int i = 0; i < scans; i++) {
+        shares[2 * i] = i;
+        shares[2 * i + 1] = i + phases[1];
+      }
+      double stepped = 0;
+      double low = lowHertz / highRate;
+      double high = highHertz / lowRate;
+      for (int i = 0; i <= 4000; i++) {
+        stepped = Math.max(stepped, Averaging.gain(low + (high - low) * i / 4000, shares));
+      }
+      assertThat(worst).as("seed %d", seed).isCloseTo(stepped, within(0.01));
+    }
+  }
+
+  @Test
+  void evenVisitsWithinAScanAreAHigherRate() {
+    double[] phases = {0.1, 0.6};
+    assertThat(Averaging.worstGain(49, 51, 400, 400, phases, 8))
+        .isEqualTo(Averaging.worstEvenGain(49, 51, 800, 800, 16));
+    // The scan rate itself is nulled by two visits half a scan apart, its double is not.
+    assertThat(Averaging.worstGain(400, 400, 400, 400, phases, 8)).isLessThan(1e-12);
+    assertThat(Averaging.worstGain(800, 800, 400, 400, phases, 8)).isEqualTo(1);
+    assertThat(Averaging.worstGain(0, 1e6, 10, 10, new double[] {0, 0.3}, 8)).isEqualTo(1);
+  }
+
+  /** The recursion run on a cosine, and on white noise of known variance. */
+  @Test
+  void exponentialAverageAgainstItsRecursion() {
+    double share = 0.125;
+    Random random = new Random(5);
+    double real = 0;
+    double imaginary = 0;
+    double noise = 0;
+    double squares = 0;
+    double w = 2 * FastMath.PI * 37 / 200;
+    for (int n = 0; n < 400_000; n++) {
+      real += share * (FastMath.cos(w * n) - real);
+      imaginary += share * (FastMath.sin(w * n) - imaginary);
+      noise += share * (random.nextGaussian() - noise);
+      squares += noise * noise;
+    }
+    assertThat(Averaging.exponentialGain(37, 200, share))
+        .isCloseTo(FastMath.hypot(real, imaginary), within(1e-9));
+    assertThat(Averaging.exponentialGain(200, 200, share)).isEqualTo(1);
+    assertThat(Averaging.exponentialNoise(share))
+        .isCloseTo(Math.sqrt(squares / 400_000), within(0.003));
+  }
+
+  /** White noise averages by the square root, slow noise not at all; between them a simulation. */
+  @Test
+  void noiseThatRemembers() {
+    assertThat(Averaging.noise(Double.POSITIVE_INFINITY, 100, 16)).isEqualTo(0.25);
+    assertThat(Averaging.noise(1e-9, 100, 16)).isCloseTo(1, within(1e-6));
+    // One pole at 10 Hz sampled at 100/s: a first-order autoregression with exp(-2 pi 10/100).
+    double memory = FastMath.exp(-2 * FastMath.PI * 0.1);
+    Random random = new Random(6);
+    double value = random.nextGaussian();
+    double squares = 0;
+    for (int mean = 0; mean < 40_000; mean++) {
+      double sum = 0;
+      for (int i = 0; i < 16; i++) {
+        sum += value;
+        value = memory * value + Math.sqrt(1 - memory * memory) * random.nextGaussian();
+      }
+      squares += sum * sum / 256;
+    }
+    assertThat(Averaging.noise(10 * FastMath.PI / 2, 100, 16))
+        .isCloseTo(Math.sqrt(squares / 40_000), within(0.006));
+  }
 }

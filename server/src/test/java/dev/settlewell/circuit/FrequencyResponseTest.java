@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
 import org.apache.commons.math3.complex.Complex;
@@ -194,7 +195,7 @@ class FrequencyResponseTest {
     }
     Complex[][] y = new Complex[nodes][nodes];
     for (Complex[] row : y) {
-      java.util.Arrays.fill(row, Complex.ZERO);
+      Arrays.fill(row, Complex.ZERO);
     }
     y[0][0] = new Complex(1 / source);
     int at = 0;
@@ -213,7 +214,7 @@ class FrequencyResponseTest {
       }
     }
     Complex[] current = new Complex[nodes];
-    java.util.Arrays.fill(current, Complex.ZERO);
+    Arrays.fill(current, Complex.ZERO);
     current[0] = new Complex(1 / source);
     return new FieldLUDecomposition<>(new Array2DRowFieldMatrix<>(ComplexField.getInstance(), y))
         .getSolver()

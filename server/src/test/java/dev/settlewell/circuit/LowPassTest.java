@@ -105,6 +105,22 @@ class LowPassTest {
     }
   }
 
+  /** One RC section: 40 dB take a corner a hundredth of the line, but for 5e-5 of it. */
+  @Test
+  void cornersAndOrdersThatWeakenALine() {
+    double corner = LowPass.butterworthCorner(1, 1e3, 0.01);
+    assertThat(corner).isCloseTo(10, within(0.001));
+    for (int order = 1; order <= 8; order++) {
+      double lowered = LowPass.butterworthCorner(order, 1e3, 0.003);
+      assertThat(LowPass.butterworth(order, lowered).at(1e3).abs()).isCloseTo(0.003, within(1e-12));
+    }
+    // Appendix A of the Filter Design Guide: six poles give 36.1 dB at twice the corner.
+    assertThat(LowPass.butterworthOrder(50, 100, FastMath.pow(10, -36.0 / 20))).hasValue(6);
+    assertThat(LowPass.butterworthOrder(50, 100, FastMath.pow(10, -37.0 / 20))).hasValue(7);
+    assertThat(LowPass.butterworthOrder(50, 100, 1e-3)).isEmpty();
+    assertThat(LowPass.butterworthOrder(50, 40, 0.5)).isEmpty();
+  }
+
   @Test
   void refusesWhatIsNoFilter() {
     assertThatIllegalArgumentException().isThrownBy(() -> LowPass.butterworth(0, 1));

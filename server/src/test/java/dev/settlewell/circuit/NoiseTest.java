@@ -40,6 +40,18 @@ class NoiseTest {
     assertThat(Noise.shaped(1e-9, 0, List.of(), new Sampler(0, 1e-12))).isInfinite();
   }
 
+  /** Inverting by 9: the noise gain is 10; one pole, pi/2 of its corner wide (handbook). */
+  @Test
+  void amplifierNoiseIsShapedByItsPole() {
+    Amplifier inverting = new Amplifier(-9, 100e3, 0);
+    double rms = Noise.amplifier(12e-9, 10, inverting, List.of(), new Sampler(1, 1e-15));
+    double expected = 120e-9 * Math.sqrt(FastMath.PI / 2 * 100e3);
+    assertThat(rms).isCloseTo(expected, within(1e-6 * expected));
+    List<Element> halved = List.of(new Rung.Series(1e3), new Rung.Parallel(1e3));
+    assertThat(Noise.amplifier(12e-9, 10, inverting, halved, new Sampler(1, 1e-15)))
+        .isCloseTo(expected / 2, within(1e-6 * expected));
+  }
+
   /** Equipartition: whatever the network, the hold capacitor keeps kT/2. */
   @Test
   void thermalNoiseOfAnyLadderIsThatOfItsHoldCapacitor() {
@@ -125,7 +137,7 @@ class NoiseTest {
     assertThat(Noise.quantizerBias(0.08)).isCloseTo(below, within(1e-12));
   }
 
-  /** Rounding done and averaged, inputs anywhere between two codes; 200,000 means a case. */
+  /** Rounding done and averaged, inputs anywhere between two codes: 100,000 means a case. */
   @ParameterizedTest
   @CsvSource({
     "0, 16",
