@@ -52,4 +52,9 @@ public record Toleranced(
   public Toleranced with(Deviation other) {
     return new Toleranced(nominal, min, max, typicalOnly, other, amplitude, of);
   }
+
+  /** The same value, {@code of} a name and with the meaning of its amplitude. */
+  Toleranced with(Optional<String> of, Optional<Amplitude> amplitude) {
+    return new Toleranced(nominal, min, max, typicalOnly, deviation, amplitude, of);
+  }
 }

@@ -1,0 +1,352 @@
+package dev.settlewell.unit;
+
+import dev.settlewell.text.Problem;
+import dev.settlewell.unit.Token.Kind;
+import java.util.List;
+import java.util.Optional;
+import java.util.Set;
+
+/** The rules of {@code schema/grammar.md} that a key may start with. */
+final class Grammar {
+  private static final Set<Dimension> NO_AMPLITUDE =
+      Set.of(
+          Dimension.RESISTANCE,
+          Dimension.CAPACITANCE,
+          Dimension.FREQUENCY,
+          Dimension.CYCLES,
+          Dimension.BITS);
+
+  /** What data sheets write for the two words of the grammar; plain peak is what is meant anyway. */
+  private static final Set<String> PEAK_TO_PEAK = Set.of("pp", "p-p", "pk-pk", "Vpp", "PP", "P-P");
+
+  private final Cursor cursor;
+  private final Amounts amounts;
+  private final Expected expected;
+
+  Grammar(Cursor cursor, Expected expected) {
+    this.cursor = cursor;
+    this.amounts = new Amounts(cursor);
+    this.expected = expected;
+  }
+
+  /** {@code quantity = signed , unit , [ "of" , NAME ] , [ amplitude ] , [ errors ]}. */
+  Toleranced quantity() {
+    leadingLimit();
+    Numeral numeral = amounts.signed(expected);
+    notTwoEnds(numeral);
+    Unit written = amounts.unit(numeral, expected);
+    Quantity quantity = numeral.in(written, expected.temperatureDifference());
+    int end = numeral.to() + between(numeral.to()).stripTrailing().length();
+    checkPositive(quantity, numeral.from(), end);
+    milli(quantity, written, numeral.from(), end);
+    Optional<String> of = of(quantity.unit());
+    Optional<Toleranced.Amplitude> amplitude = amplitude(quantity.unit());
+    trailingLimit(end);
+    notTwoEnds(numeral);
+    noPoint();
+    return Toleranced.exact(quantity).with(errors(quantity.unit())).with(of, amplitude);
+  }
+
+  /** {@code component = code , [ errors ] | quantity}. */
+  Toleranced component() {
+    Token first = cursor.peek();
+    Token second = cursor.peek(1);
+    boolean two = first.is(Kind.NUMBER) && second.is(Kind.WORD);
+    int pieces = two ? 2 : 1;
+    String text = two ? first.text() + second.text() : first.text();
+    Optional<Code.Reading> code =
+        two || first.is(Kind.WORD) ? Code.read(text) : Optional.empty();
+    if (code.isEmpty() || !fits(code.get()) || two && isUnit(second, code.get())) {
+      return quantity();
+    }
+    for (int i = 0; i < pieces; i++) {
+      cursor.take();
+    }
+    int end = two ? second.to() : first.to();
+    if (two && !first.touches(second)) {
+      apart(first, second, code.get());
+    }
+    Quantity quantity = code.get().quantity();
+    checkPositive(quantity, first.from(), end);
+    letter(code.get(), first.from(), end);
+    noPoint();
+    return Toleranced.exact(quantity).with(errors(quantity.unit()));
+  }
+
+  private boolean fits(Code.Reading code) {
+    return UnitSlips.accepts(expected, code.quantity().unit());
+  }
+
+  /** {@code 100 n} lacks its unit; {@code 5 F} and {@code 5F} have theirs. */
+  private boolean isUnit(Token word, Code.Reading code) {
+    return UnitTable.read(word.text()).filter(u -> u.dimension() == code.dimension()).isPresent()
+        || word.text().length() == 1 && !cursor.peek().touches(word);
+  }
+
+  private void apart(Token number, Token rest, Code.Reading code) {
+    cursor.slip(number.to(), rest.from(), "a letter-digit code has no blank", "");
+  }
+
+  /** {@code 4K7J}: the letter of a tolerance is not read, and said in percent instead. */
+  private void letter(Code.Reading code, int from, int end) {
+    if (code.tolerance().isEmpty()) {
+      return;
+    }
+    String tolerance = code.plain() + " ±" + code.tolerance().get() + " %";
+    String why = "a tolerance is written in percent, not as a letter";
+    throw cursor.refuse(from, end, why, tolerance);
+  }
+
+  Deviation deviation() {
+    return new Errors(cursor, differences()).read(true);
+  }
+
+  Need need() {
+    List<Tolerance> tolerances = new Errors(cursor, differences()).tolerances();
+    Token word = cursor.peek();
+    if (word.is(Kind.WORD) && word.text().matches("(?i)worst-?case|worst")) {
+      cursor.take();
+      Token second = cursor.peek();
+      boolean two = word.text().equalsIgnoreCase("worst") && second.text().equals("case");
+      int end = two ? cursor.take().to() : word.to();
+      if (!word.is("worst-case")) {
+        cursor.slip(word.from(), end, "the word is worst-case", "worst-case");
+      }
+      return new Need(tolerances, true);
+    }
+    if (word.is(Kind.OPEN)) {
+      String why = "a need has no coverage factor: it is judged at 95 %, or as worst-case";
+      throw cursor.refuse(word.from(), cursor.lastEnd(), why);
+    }
+    return new Need(tolerances, false);
+  }
+
+  Range range(boolean mayFall) {
+    return new Ranges(cursor).read(expected, mayFall);
+  }
+
+  private Expected differences() {
+    return new Expected(expected.dimensions(), expected.measured(), true, false, true);
+  }
+
+  private Deviation errors(Unit unit) {
+    boolean point = !expected.temperatureDifference();
+    return new Errors(cursor, Errors.ofValue(unit, point)).read(false);
+  }
+
+  private String between(int from) {
+    return cursor.text(from, Math.max(from, cursor.peek().from()));
+  }
+
+  private void checkPositive(Quantity quantity, int from, int to) {
+    if (expected.positive() && !(quantity.value() > 0)) {
+      throw cursor.refuse(
+          Problem.Kind.VALUE_OUT_OF_RANGE, from, to, "the value must be above zero", List.of());
+    }
+  }
+
+  /** {@code 5 mohm} is often meant as megohm: read as it stands, and asked back. */
+  private void milli(Quantity quantity, Unit unit, int from, int to) {
+    String symbol = unit.written();
+    boolean doubtful = symbol.equals("mohm") || symbol.equals("mOhm");
+    if (doubtful && !expected.shuntSized() && Math.abs(quantity.value()) < 0.1) {
+      String number = cursor.text(from, to).replace(symbol, "").trim();
+      cursor.note(
+          Problem.Kind.AMBIGUOUS_TEXT,
+          from,
+          to,
+          symbol + " is read as milliohm: write " + number + " mΩ, or " + number
+              + " MΩ if megohm is meant",
+          false,
+          List.of(number + " mΩ", number + " MΩ"));
+    }
+  }
+
+  /** {@code 50 % of ref}. */
+  private Optional<String> of(Unit unit) {
+    if (!cursor.isNextWord("of")) {
+      return Optional.empty();
+    }
+    Token of = cursor.take();
+    Token name = cursor.peek();
+    if (unit.dimension() != Dimension.RATIO) {
+      throw cursor.refuse(of.from(), cursor.lastEnd(), "only a percentage is of something", "");
+    }
+    if (!name.is(Kind.NAME)) {
+      throw cursor.refuse(of.from(), of.to(), "a name is missing, as in 50 % of ref");
+    }
+    cursor.take();
+    return Optional.of(name.text());
+  }
+
+  private Optional<Toleranced.Amplitude> amplitude(Unit unit) {
+    Token word = cursor.peek();
+    if (!word.is(Kind.WORD)) {
+      return Optional.empty();
+    }
+    Optional<Toleranced.Amplitude> meant = Optional.empty();
+    if (word.text().equalsIgnoreCase("rms")) {
+      meant = spelled(word, "rms", Toleranced.Amplitude.RMS);
+    } else if (word.is("peak-to-peak") || PEAK_TO_PEAK.contains(word.text())) {
+      meant = spelled(word, "peak-to-peak", Toleranced.Amplitude.PEAK_TO_PEAK);
+    } else if (List.of("peak", "DC", "dc").contains(word.text())) {
+      remark(word);
+    }
+    if (meant.isPresent() && NO_AMPLITUDE.contains(unit.dimension())) {
+      throw cursor.refuse(word.from(), word.to(), "this value has no amplitude", "");
+    }
+    return meant;
+  }
+
+  private Optional<Toleranced.Amplitude> spelled(
+      Token word, String spelling, Toleranced.Amplitude meant) {
+    cursor.take();
+    if (!word.is(spelling)) {
+      cursor.slip(word.from(), word.to(), "the word is " + spelling, spelling);
+    }
+    return Optional.of(meant);
+  }
+
+  private void remark(Token word) {
+    cursor.take();
+    String why =
+        word.is("peak") ? "an amplitude is the peak unless it says else" : "a unit bears no remark";
+    cursor.slip(word.from(), word.to(), why, "");
+  }
+
+  /** {@code <5 mV}, {@code max 5 pF}. */
+  private void leadingLimit() {
+    Optional<String> key = Leftovers.limit(cursor.peek());
+    if (key.isPresent() && cursor.peek(1).is(Kind.NUMBER)) {
+      throw limit(key.get(), cursor.text(cursor.peek(1).from(), cursor.lastEnd()));
+    }
+  }
+
+  /** {@code 5 pF max}. */
+  private void trailingLimit(int end) {
+    Optional<String> key = Leftovers.limit(cursor.peek());
+    boolean last = cursor.peek(1).is(Kind.END) || cursor.peek(1).is(".");
+    if (key.isPresent() && last && cursor.peek().is(Kind.WORD)) {
+      throw limit(key.get(), cursor.text(0, end).strip());
+    }
+  }
+
+  private RuntimeException limit(String key, String value) {
+    int end = cursor.lastEnd();
+    if (key.equals("min")) {
+      return cursor.refuse(
+          0, end, "a least value alone says too little: write {min: …, typical: …, max: …}");
+    }
+    String why = "a limit or a typical figure is said in the long form";
+    return cursor.refuse(0, end, why, "{" + key + ": " + value + "}");
+  }
+
+  /** {@code 5..7 pF}, {@code 5 pF to 7 pF} where one value is wanted. */
+  private void notTwoEnds(Numeral first) {
+    boolean to = cursor.isNextWord("to") || cursor.isNextWord("until");
+    if (!to && !Leftovers.isDash(cursor)) {
+      return;
+    }
+    int end = cursor.lastEnd();
+    String low = cursor.text(first.from(), cursor.peek().from()).strip();
+    cursor.take();
+    String high = cursor.text(cursor.peek().from(), end);
+    String unit = high.replaceFirst("^[-+]?[0-9.,eE]*\\s*", "");
+    String lower = low.matches(".*[0-9]") && !unit.isEmpty() ? low + " " + unit : low;
+    String why = "one value is wanted here, and limits are said in the long form";
+    throw cursor.refuse(
+        first.from(), end, why, "{min: " + lower + ", max: " + high + "}");
+  }
+
+  /** {@code 10 kΩ @ 25 °C}: a value without errors holds at no point of its own. */
+  private void noPoint() {
+    Token token = cursor.peek();
+    if (token.is("@") || cursor.isNextWord("at")) {
+      String why =
+          "a value without errors is not stated at a temperature; the sheet's is stated-at";
+      throw cursor.refuse(token.from(), cursor.lastEnd(), why, "");
+    }
+  }
+
+  // Numbers without a unit.
+
+  /** {@code count = digits}. */
+  double count() {
+    Token token = cursor.peek();
+    if (!token.is(Kind.NUMBER)) {
+      throw wholeNumber(token, List.of());
+    }
+    double value = amounts.number(expected, "").times(0);
+    boolean plain = token.text().chars().allMatch(c -> c >= '0' && c <= '9');
+    if (!plain && value != Math.rint(value)) {
+      throw wholeNumber(token, List.of());
+    }
+    if (!plain && NumberText.of(token.text()).isStrict()) {
+      String whole = Engineering.decimal(value).toPlainString();
+      cursor.slip(token.from(), token.to(), "a count is written in digits", whole);
+    }
+    return value;
+  }
+
+  private RuntimeException wholeNumber(Token token, List<String> spellings) {
+    return cursor.refuse(
+        Problem.Kind.NOT_ONE_VALUE,
+        token.from(),
+        token.to(),
+        "a whole number is expected here, such as 16",
+        spellings);
+  }
+
+  /** {@code plain = signed}. */
+  double plain() {
+    return amounts.signed(expected).times(0);
+  }
+
+  /** {@code fraction = digits , "/" , digits}. */
+  double fraction() {
+    Token top = cursor.peek();
+    Token bottom = cursor.peek(2);
+    boolean shaped = top.is(Kind.NUMBER) && cursor.peek(1).is(Kind.SLASH) && bottom.is(Kind.NUMBER);
+    if (!shaped) {
+      throw noFraction(top);
+    }
+    cursor.take();
+    cursor.take();
+    cursor.take();
+    boolean whole = top.text().matches("\\d{1,9}") && bottom.text().matches("\\d{1,9}");
+    if (!whole || Integer.parseInt(bottom.text()) == 0) {
+      throw cursor.refuse(
+          top.from(), bottom.to(), "a fraction of two whole numbers is expected, such as 1/8");
+    }
+    return Double.parseDouble(top.text()) / Double.parseDouble(bottom.text());
+  }
+
+  private RuntimeException noFraction(Token token) {
+    String why = "a fraction is expected here, such as 1/8";
+    if (token.is(Kind.NUMBER) && NumberText.of(token.text()).isStrict()) {
+      double parts = 1 / Double.parseDouble(token.text());
+      if (parts == Math.rint(parts) && parts >= 1 && parts < 1e9) {
+        String spelling = "1/" + Engineering.decimal(parts).toPlainString();
+        return cursor.refuse(token.from(), token.to(), why, spelling);
+      }
+    }
+    return cursor.refuse(token.from(), token.to(), why);
+  }
+
+  /** {@code ratio = signed , [ "V/V" | "dB" ]}; decibels become a ratio of amplitudes. */
+  double ratio() {
+    Numeral numeral = amounts.signed(expected);
+    Token word = cursor.peek();
+    if (word.is(Kind.END)) {
+      return numeral.times(0);
+    }
+    if (!word.is(Kind.WORD)) {
+      throw Leftovers.refusal(cursor);
+    }
+    Expected units = Expected.of(Dimension.RATIO, Dimension.DECIBEL);
+    Unit unit = amounts.unit(numeral, units);
+    return unit.dimension() == Dimension.DECIBEL
+        ? StrictMath.pow(10, numeral.times(0) / 20)
+        : numeral.times(UnitTable.power(unit));
+  }
+}
