@@ -3,6 +3,7 @@ package dev.settlewell.finding;
 import dev.settlewell.text.Fix;
 import dev.settlewell.text.Place;
 import dev.settlewell.text.Related;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 
@@ -17,7 +18,9 @@ import java.util.Optional;
  *     times; "" else
  * @param message one sentence, figures first
  * @param facts rows under it: need, have, margin
- * @param fixes ways to mend the text; of computed values only those that were shown to help
+ * @param fixes ways to mend the text that need no proof: another spelling, a nearest name
+ * @param candidates computed values that may help; nobody offers one before {@link Remedies} has
+ *     shown that it does
  * @param acceptance present where the sheet accepts it
  */
 public record Finding(
@@ -30,11 +33,29 @@ public record Finding(
     List<Fact> facts,
     List<Related> related,
     List<Fix> fixes,
+    List<Fix> candidates,
     Optional<Acceptance> acceptance) {
   public Finding {
     facts = List.copyOf(facts);
     related = List.copyOf(related);
     fixes = List.copyOf(fixes);
+    candidates = List.copyOf(candidates);
+  }
+
+  public Finding(
+      String name,
+      Severity severity,
+      Place place,
+      String subject,
+      String about,
+      String message,
+      List<Fact> facts,
+      List<Related> related,
+      List<Fix> fixes,
+      Optional<Acceptance> acceptance) {
+    this(
+        name, severity, place, subject, about, message, facts, related, fixes, List.of(),
+        acceptance);
   }
 
   public Finding(
@@ -46,19 +67,62 @@ public record Finding(
       List<Fact> facts,
       List<Related> related) {
     this(
-        name,
-        severity,
-        place,
-        subject,
-        "",
-        message,
-        facts,
-        related,
-        List.of(),
+        name, severity, place, subject, "", message, facts, related, List.of(), List.of(),
         Optional.empty());
   }
 
   public boolean isAccepted() {
     return acceptance.isPresent();
+  }
+
+  /** True where both say the same thing of the same subject, whatever the figures. */
+  public boolean sameAs(Finding other) {
+    return name.equals(other.name)
+        && subject.equals(other.subject)
+        && about.equals(other.about)
+        && place.sheet().equals(other.place.sheet());
+  }
+
+  public Finding with(Severity other) {
+    return new Finding(
+        name, other, place, subject, about, message, facts, related, fixes, candidates, acceptance);
+  }
+
+  public Finding acceptedAs(Acceptance accepted) {
+    return new Finding(
+        name,
+        severity,
+        place,
+        subject,
+        about,
+        message,
+        facts,
+        related,
+        fixes,
+        candidates,
+        Optional.of(accepted));
+  }
+
+  public Finding withFixes(List<Fix> others) {
+    return new Finding(
+        name, severity, place, subject, about, message, facts, related, others, candidates,
+        acceptance);
+  }
+
+  /** The same finding at another place; the old one becomes a related place. */
+  public Finding movedTo(Place other, String role) {
+    List<Related> all = new ArrayList<>();
+    all.add(new Related(place, role));
+    all.addAll(related);
+    return new Finding(
+        name, severity, other, subject, about, message, facts, all, fixes, candidates, acceptance);
+  }
+
+  /** The same finding with one more related place. */
+  public Finding with(Related more) {
+    List<Related> all = new ArrayList<>(related);
+    all.add(more);
+    return new Finding(
+        name, severity, place, subject, about, message, facts, all, fixes, candidates, acceptance);
   }
 }

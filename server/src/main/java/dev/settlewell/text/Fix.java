@@ -1,5 +1,6 @@
 package dev.settlewell.text;
 
+import java.util.Comparator;
 import java.util.List;
 
 /**
@@ -13,5 +14,19 @@ import java.util.List;
 public record Fix(String title, List<Edit> edits, boolean safe) {
   public Fix {
     edits = List.copyOf(edits);
+  }
+
+  /** The text with the edits made; those that belong to other sheets are passed over. */
+  public String applyTo(SourceText text) {
+    List<Edit> last =
+        edits.stream()
+            .filter(edit -> edit.place().sheet().equals(text.name()))
+            .sorted(Comparator.comparingInt((Edit edit) -> edit.place().start()).reversed())
+            .toList();
+    StringBuilder content = new StringBuilder(text.content());
+    for (Edit edit : last) {
+      content.replace(edit.place().start(), edit.place().end(), edit.replacement());
+    }
+    return content.toString();
   }
 }

@@ -1,0 +1,170 @@
+package dev.settlewell.finding.catalog;
+
+import dev.settlewell.channel.Analysis;
+import dev.settlewell.channel.Budget;
+import dev.settlewell.channel.ChannelFigures;
+import dev.settlewell.channel.Figure;
+import dev.settlewell.sheet.Named;
+import dev.settlewell.sheet.Part;
+import dev.settlewell.sheet.Slot;
+import dev.settlewell.text.Place;
+import dev.settlewell.text.SourceText;
+import dev.settlewell.unit.Need;
+import dev.settlewell.unit.Range;
+import dev.settlewell.unit.Tolerance;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/** A channel as a check sees it: its figures, and what the sheet says of it. */
+record ChannelView(Analysis analysis, ChannelFigures figures, Part part) {
+
+  /** One stage of a path, and how findings and acceptances call it: {@code amplifier-2}. */
+  record Stage(String label, Part part) {}
+
+  /** Every channel whose mapping could be read, once for each scan that samples it. */
+  static List<ChannelView> all(Analysis analysis) {
+    return analysis.channels().stream()
+        .filter(c -> c.channel().value().isStated())
+        .map(c -> new ChannelView(analysis, c, c.channel().value().stated().get()))
+        .toList();
+  }
+
+  String name() {
+    return figures.channel().name();
+  }
+
+  SourceText text() {
+    return analysis.linked().sheet().text();
+  }
+
+  OptionalDouble value(String figure) {
+    return figures.figures().value(figure);
+  }
+
+  /** The figure's value, NaN where it has none: every comparison with it is false. */
+  double number(String figure) {
+    return value(figure).orElse(Double.NaN);
+  }
+
+  /** The figure's magnitude, NaN where it has none. */
+  double magnitude(String figure) {
+    return Math.abs(number(figure));
+  }
+
+  Optional<Figure> figure(String name) {
+    return figures.figures().get(name);
+  }
+
+  /** Where the value of a key stands; the channel's name where it does not stand anywhere. */
+  Place place(String key) {
+    Slot<?> slot = part.slot(key);
+    return slot.isMissing() ? figures.channel().place() : slot.place();
+  }
+
+  boolean has(String key) {
+    return part.has(key);
+  }
+
+  Optional<Part> converter() {
+    return figures.converter().flatMap(named -> named.value().stated());
+  }
+
+  Optional<Part> scan() {
+    return figures.scan().flatMap(named -> named.value().stated());
+  }
+
+  Optional<Named<Part>> namedScan() {
+    return figures.scan();
+  }
+
+  /** A figure of this channel's scan, NaN where it has none. */
+  double scanNumber(String figure) {
+    return figures
+        .scan()
+        .map(scan -> analysis.scans().get(scan.name()))
+        .map(scan -> scan.figures().value(figure).orElse(Double.NaN))
+        .orElse(Double.NaN);
+  }
+
+  Optional<Budget> budget() {
+    return figures.budget();
+  }
+
+  Optional<Range> measures() {
+    return part.range("measures").stated();
+  }
+
+  /** The measured unit as figures write it. */
+  String unit() {
+    return measures().map(range -> range.unit().symbol()).orElse("");
+  }
+
+  /**
+   * What the sheet asks for, in the measured unit: at the worst point where there is a budget, at
+   * its tightest without one. Empty where it asks for nothing.
+   */
+  OptionalDouble needs() {
+    if (budget().isPresent() && budget().get().needs().isPresent()) {
+      return budget().get().needs();
+    }
+    Optional<Need> need = part.need("needs").stated();
+    if (need.isEmpty() || measures().isEmpty()) {
+      return OptionalDouble.empty();
+    }
+    double sum = 0;
+    for (Tolerance tolerance : need.get().tolerances()) {
+      sum += Math.min(tolerance.minus(), tolerance.plus()) * whole(tolerance, measures().get());
+    }
+    return sum > 0 ? OptionalDouble.of(sum) : OptionalDouble.empty();
+  }
+
+  private static double whole(Tolerance tolerance, Range measures) {
+    if (!tolerance.isShare() || measures.unit().symbol().equals(tolerance.unit().symbol())) {
+      return 1;
+    }
+    if (tolerance.of() == Tolerance.Of.READING) {
+      boolean crossesZero = measures.contains(0);
+      double low = Math.abs(measures.low());
+      double high = Math.abs(measures.high());
+      return crossesZero ? 0 : Math.min(low, high);
+    }
+    return measures.width();
+  }
+
+  /**
+   * The larger of half an LSB and a tenth of what is needed, in the measured unit: what one effect
+   * may take before it is worth a finding. NaN where the LSB is not known.
+   */
+  double noticeable() {
+    return Math.max(number("lsb-measured") / 2, needs().orElse(0) / 10);
+  }
+
+  List<Stage> stages() {
+    if (!(part.list("path", Part.class) instanceof Slot.Stated<List<Slot<Part>>> path)) {
+      return List.of();
+    }
+    List<Stage> stages = new ArrayList<>();
+    for (Slot<Part> slot : path.value()) {
+      slot.stated().ifPresent(stage -> stages.add(new Stage(label(stage, stages), stage)));
+    }
+    return stages;
+  }
+
+  private static String label(Part stage, List<Stage> before) {
+    long same = before.stream().filter(s -> s.part().kind().equals(stage.kind())).count();
+    return same == 0 ? stage.kind() : stage.kind() + "-" + (same + 1);
+  }
+
+  /** The last stage of a kind before the pin. */
+  Optional<Stage> lastStage(String kind) {
+    return stages().stream()
+        .filter(stage -> stage.part().kind().equals(kind))
+        .reduce((first, second) -> second);
+  }
+
+  Optional<Part> sensor() {
+    return part.part("sensor").stated();
+  }
+}

@@ -1,0 +1,65 @@
+package dev.settlewell.finding.catalog;
+
+import dev.settlewell.finding.Finding;
+import dev.settlewell.finding.Severity;
+import dev.settlewell.sheet.Part;
+import java.util.Optional;
+import java.util.function.Consumer;
+
+/** The path takes away part of what the channel wants to see. */
+final class FilterDroop extends ChannelCheck {
+  private static final double ALLOWED = 0.01;
+  private static final double SHARE_OF_NEEDS = 0.1;
+
+  @Override
+  public String name() {
+    return "filter-droop";
+  }
+
+  @Override
+  public Severity severity() {
+    return Severity.WARNING;
+  }
+
+  @Override
+  public String summary() {
+    return "path and averaging take away part of the signal at the edge of the wanted band";
+  }
+
+  @Override
+  void check(ChannelView channel, Consumer<Finding> report) {
+    double droop = channel.number("droop");
+    double amplitude = amplitude(channel);
+    double allowed = SHARE_OF_NEEDS * channel.needs().orElse(Double.POSITIVE_INFINITY);
+    boolean tooMuch = droop * amplitude > allowed;
+    if (!(droop > ALLOWED) && !tooMuch) {
+      return;
+    }
+    String lost =
+        Double.isNaN(amplitude)
+            ? ""
+            : ", " + Words.of(droop * amplitude, channel.unit()) + " of what moves there";
+    report.accept(
+        FindingBuilder.of(this, channel, "band")
+            .message(
+                "%s of the signal is lost at the band's edge of %s%s; the corner of the path lies at %s"
+                    .formatted(
+                        Words.share(droop),
+                        Words.of(channel.number("band"), "Hz"),
+                        lost,
+                        Words.of(channel.number("corner-frequency"), "Hz")))
+            .need(
+                tooMuch ? "at most " + Words.of(allowed, channel.unit()) : Words.share(ALLOWED))
+            .have(Words.share(droop))
+            .related(channel.place("average"), "the average takes its part")
+            .related(channel.lastStage("capacitor").map(s -> s.part().place()), "the capacitor")
+            .build());
+  }
+
+  private static double amplitude(ChannelView channel) {
+    Optional<Part> band = channel.part().part("band").stated();
+    return band.flatMap(part -> part.quantity("amplitude").stated())
+        .map(quantity -> quantity.value())
+        .orElse(Double.NaN);
+  }
+}

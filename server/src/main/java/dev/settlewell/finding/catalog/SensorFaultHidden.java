@@ -1,0 +1,61 @@
+package dev.settlewell.finding.catalog;
+
+import dev.settlewell.finding.Finding;
+import dev.settlewell.finding.Severity;
+import dev.settlewell.channel.Figure;
+import java.util.Optional;
+import java.util.function.Consumer;
+
+/** A broken sensor gives a code that a whole one may give too. */
+final class SensorFaultHidden extends ChannelCheck {
+  @Override
+  public String name() {
+    return "sensor-fault-hidden";
+  }
+
+  @Override
+  public Severity severity() {
+    return Severity.WARNING;
+  }
+
+  @Override
+  public String summary() {
+    return "an open or shorted sensor reads like a value that can be";
+  }
+
+  @Override
+  void check(ChannelView channel, Consumer<Finding> report) {
+    check(channel, "open", report);
+    check(channel, "short", report);
+  }
+
+  private void check(ChannelView channel, String fault, Consumer<Finding> report) {
+    double low = channel.number("code-limit-low");
+    double high = channel.number("code-limit-high");
+    Optional<Figure> code = channel.figure("code-" + fault);
+    Optional<String> undetermined =
+        code.map(Figure::state)
+            .filter(Figure.State.None.class::isInstance)
+            .map(state -> ((Figure.State.None) state).why());
+    double value = channel.number("code-" + fault);
+    boolean inside = low <= value && value <= high;
+    if (!inside && undetermined.isEmpty()) {
+      return;
+    }
+    String what = fault.equals("open") ? "an open sensor" : "a shorted sensor";
+    String codes = Words.count(Math.floor(low)) + " to " + Words.count(Math.ceil(high));
+    String message =
+        inside
+            ? "%s reads as code %s, and what is measured gives codes %s: a fault cannot be told from a value; leave room beside the measured range, or let the node be pulled out of it"
+                .formatted(what, Words.count(value), codes)
+            : "%s leaves the pin without a defined code (%s); a resistor that pulls the node out of the measured range makes the fault visible"
+                .formatted(what, undetermined.get());
+    FindingBuilder finding =
+        FindingBuilder.of(this, channel, "sensor").about(fault).message(message);
+    if (!Double.isNaN(low)) {
+      finding.need("outside codes " + codes);
+    }
+    report.accept(
+        finding.have(inside ? "code " + Words.count(value) : "undetermined").build());
+  }
+}

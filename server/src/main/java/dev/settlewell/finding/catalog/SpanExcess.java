@@ -1,0 +1,107 @@
+package dev.settlewell.finding.catalog;
+
+import dev.settlewell.finding.Check;
+import dev.settlewell.finding.Finding;
+import dev.settlewell.finding.Severity;
+import dev.settlewell.sheet.Part;
+import dev.settlewell.text.Fix;
+import dev.settlewell.unit.PreferredValues;
+import dev.settlewell.unit.PreferredValues.Series;
+import java.util.Optional;
+import java.util.function.Consumer;
+
+/** How far a channel's voltage at the pin leaves the span of its converter, at one of its ends. */
+final class SpanExcess {
+  private final ChannelView channel;
+  private final boolean above;
+
+  SpanExcess(ChannelView channel, boolean above) {
+    this.channel = channel;
+    this.above = above;
+  }
+
+  /** An error where the nominal voltage leaves the nominal span, a warning where the worst does. */
+  void report(Check check, Consumer<Finding> report) {
+    String end = above ? "high" : "low";
+    double nominal = channel.number("pin-nominal-" + end);
+    double span = channel.number("span-" + end);
+    double worst = channel.number("pin-" + end);
+    double least = channel.number("span-least-" + end);
+    if (beyond(nominal, span)) {
+      report.accept(finding(check, Severity.ERROR, nominal, span, ""));
+    } else if (beyond(worst, least)) {
+      report.accept(finding(check, Severity.WARNING, worst, least, " with all tolerances"));
+    }
+  }
+
+  private boolean beyond(double voltage, double limit) {
+    // A range that ends exactly where the span does is meant to; its last bit is no excess.
+    double slack = 1e-9 * Math.abs(channel.number("full-scale"));
+    double tolerated = Double.isNaN(slack) ? 0 : slack;
+    return above ? voltage > limit + tolerated : voltage < limit - tolerated;
+  }
+
+  private Finding finding(
+      Check check, Severity severity, double voltage, double limit, String tolerances) {
+    double excess = Math.abs(voltage - limit);
+    String message =
+        "the pin %s %s%s, the span ends at %s: %s %s; %s"
+            .formatted(
+                above ? "reaches" : "falls to",
+                volts(voltage),
+                tolerances,
+                volts(limit),
+                volts(excess),
+                above ? "read as full scale" : "read as code 0",
+                mend(voltage, limit));
+    return FindingBuilder.of(check, channel, "measures")
+        .severity(severity)
+        .message(message)
+        .need(volts(voltage))
+        .have(volts(limit))
+        .margin(volts(above ? limit - voltage : voltage - limit))
+        .related(
+            channel.converter().map(part -> part.slot("reference").place()),
+            "the reference of the span")
+        .candidate(above && limit > 0 ? smaller(limit / voltage) : Optional.empty())
+        .build();
+  }
+
+  private String mend(double voltage, double limit) {
+    return above && limit > 0
+        ? "at most " + Words.share(limit / voltage) + " of the signal fit"
+        : "raise the level of the path, or narrow what is measured";
+  }
+
+  private Optional<Fix> smaller(double factor) {
+    Optional<Part> shunt = channel.lastStage("shunt").map(ChannelView.Stage::part);
+    if (shunt.isPresent()) {
+      return replace(shunt.get(), "value", nominal(shunt.get(), "value") * factor, "shunt");
+    }
+    Optional<Part> divider = channel.lastStage("divider").map(ChannelView.Stage::part);
+    if (divider.isPresent()) {
+      double upper = nominal(divider.get(), "upper");
+      double lower = nominal(divider.get(), "lower");
+      double ratio = factor * lower / (upper + lower);
+      return replace(divider.get(), "lower", upper * ratio / (1 - ratio), "divider's lower part");
+    }
+    return Optional.empty();
+  }
+
+  private static double nominal(Part part, String key) {
+    return part.quantity(key).stated().map(quantity -> quantity.value()).orElse(Double.NaN);
+  }
+
+  private Optional<Fix> replace(Part part, String key, double value, String what) {
+    if (!(value > 0)) {
+      return Optional.empty();
+    }
+    String preferred = Words.part(PreferredValues.nextLower(Series.E24, value), "Ω");
+    return Rewriting.fix(
+        channel.text(), part.slot(key), preferred, "Make the " + what + " " + preferred);
+  }
+
+  private static String volts(double value) {
+    return Words.of(value, "V");
+  }
+}
