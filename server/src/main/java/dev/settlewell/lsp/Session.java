@@ -1,0 +1,41 @@
+package dev.settlewell.lsp;
+
+import java.util.function.UnaryOperator;
+
+/**
+ * One client from its first message to its last. The only thing that changes is which {@link View}
+ * is the present one, and only the thread that reads messages changes it.
+ */
+final class Session {
+  private final Client client;
+  private final Faults faults;
+  private final Worker worker;
+  private volatile View view;
+
+  Session(Client client, Desk desk) {
+    this.client = client;
+    this.faults = new Faults(client);
+    this.worker = new Worker(fault -> faults.report("background work", fault));
+    this.view = new View(Abilities.of(null), Settings.DEFAULT, Drafts.NONE, desk);
+  }
+
+  View view() {
+    return view;
+  }
+
+  void change(UnaryOperator<View> step) {
+    view = step.apply(view);
+  }
+
+  Client client() {
+    return client;
+  }
+
+  Faults faults() {
+    return faults;
+  }
+
+  Worker worker() {
+    return worker;
+  }
+}
