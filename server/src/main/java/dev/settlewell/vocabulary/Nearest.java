@@ -1,6 +1,7 @@
 package dev.settlewell.vocabulary;
 
 import java.util.Collection;
+import java.util.Locale;
 import java.util.Optional;
 
 /** The known word that was most likely meant by an unknown one. */
@@ -9,9 +10,11 @@ public final class Nearest {
 
   /**
    * The nearest of {@code known}, the first of equals; empty where none is near enough to be a slip
-   * of the keyboard: more than a third of the letters would have to change.
+   * of the keyboard: more than a third of the letters would have to change. Capitals,
+   * blanks and underscores count nothing.
    */
-  public static Optional<String> of(String written, Collection<String> known) {
+  public static Optional<String> of(String text, Collection<String> known) {
+    String written = text.toLowerCase(Locale.ROOT).replace('_', '-').replace(' ', '-');
     int limit = Math.max(1, written.length() / 3);
     String best = null;
     for (String word : known) {
@@ -19,7 +22,7 @@ public final class Nearest {
         continue;
       }
       int distance = distance(written, word);
-      if (distance <= limit && distance > 0) {
+      if (distance <= limit) {
         best = word;
         limit = distance - 1;
       }
