@@ -1,6 +1,5 @@
 package dev.settlewell.sheet;
 
-import dev.settlewell.syntax.Node;
 import dev.settlewell.syntax.SyntaxTree;
 import dev.settlewell.text.Place;
 import dev.settlewell.text.Problem;
@@ -16,9 +15,6 @@ import java.util.Map;
 
 /** Binds the tree of a text to the schema. */
 public final class Sheets {
-  /** The one version of the format there is. */
-  private static final String VERSION = "1";
-
   private static final List<String> PARTS_OF_TOTAL =
       List.of("offset-error", "gain-error", "integral-nonlinearity");
 
@@ -33,7 +29,6 @@ public final class Sheets {
     Binder binder = new Binder(vocabulary, tree.text(), report);
     Part top = binder.sheet(tree.root());
     Names.requireOneMeaning(binder.definitions(), report);
-    checkVersion(tree.root(), report);
     Map<NameKind, Map<String, Place>> places = places(binder.definitions());
     Map<String, Named<Part>> converters =
         named(top, NameKind.CONVERTER, Part.class, places);
@@ -69,23 +64,6 @@ public final class Sheets {
             (name, slot) ->
                 named.put(name, new Named<>(name, places.get(kind).get(name), slot)));
     return Collections.unmodifiableMap(named);
-  }
-
-  private static void checkVersion(Node.Mapping root, Report report) {
-    for (Node.Entry entry : root.entries()) {
-      boolean other =
-          entry.key().text().equals("channel-sheet")
-              && entry.value() instanceof Node.Scalar scalar
-              && !scalar.text().equals(VERSION);
-      if (other) {
-        report.add(
-            Problem.Kind.FORMAT_VERSION,
-            entry.value().place(),
-            "this tool reads version " + VERSION + " of the format",
-            Report.replace(entry.value().place(), VERSION));
-        return;
-      }
-    }
   }
 
   /** The total unadjusted error holds offset, gain and non-linearity: beside it they count twice. */

@@ -28,6 +28,7 @@ final class ValueReader {
   /** Wider than the names' own pattern, so that {@code Ref} is met as an unknown name. */
   private static final Pattern WORD = Pattern.compile("[A-Za-z][A-Za-z_ -]*[A-Za-z0-9_-]*");
 
+  private static final String VERSION_KEY = "channel-sheet";
   private static final Pattern DATE = Pattern.compile("\\d{4}-\\d{2}-\\d{2}");
 
   private static final Map<String, String> FLAGS =
@@ -89,7 +90,13 @@ final class ValueReader {
     Optional<String> fault = Bounds.fault(key, value, scope);
     boolean known =
         reading.flaws().stream().map(Flaw::kind).anyMatch(Problem.Kind.VALUE_OUT_OF_RANGE::equals);
-    if (fault.isPresent() && !known) {
+    if (fault.isPresent() && key.name().equals(VERSION_KEY)) {
+      report.add(
+          Problem.Kind.FORMAT_VERSION,
+          scalar.place(),
+          "this tool reads version 1 of the format",
+          Report.replace(scalar.place(), "1"));
+    } else if (fault.isPresent() && !known) {
       report.add(Problem.Kind.VALUE_OUT_OF_RANGE, scalar.place(), fault.get());
     }
     if (fault.isPresent() || known) {
