@@ -24,6 +24,15 @@ final class Draft {
     this.chars = original.toCharArray();
   }
 
+  int length() {
+    return chars.length;
+  }
+
+  /** The character as it is read; a line break behind the text's end. */
+  char at(int offset) {
+    return offset < chars.length ? chars[offset] : '\n';
+  }
+
   /** Puts {@code text} before the character at {@code offset}, behind what was put there before. */
   void insert(int offset, String text) {
     insertions.merge(offset, text, String::concat);

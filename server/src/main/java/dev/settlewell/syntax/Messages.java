@@ -4,7 +4,7 @@ package dev.settlewell.syntax;
 final class Messages {
   private Messages() {}
 
-  static String of(String complaint, String written) {
+  static String of(String complaint) {
     if (complaint.contains("mapping values are not allowed")) {
       return "a second colon, or an indentation that fits nothing above: a text with `: ` in it"
           + " stands in quotes";
@@ -18,6 +18,13 @@ final class Messages {
     if (complaint.contains("cannot start any token")) {
       return "a value cannot begin like this: put it in quotes";
     }
+    if (complaint.contains("escape character")) {
+      return "`\\` begins an escape inside double quotes: write `\\\\`, or use single quotes";
+    }
     return "this line cannot be read as YAML";
+  }
+
+  static String tooDeep() {
+    return "nested deeper than " + TreeBuilder.MAX_DEPTH + " levels; nothing in a sheet needs that";
   }
 }

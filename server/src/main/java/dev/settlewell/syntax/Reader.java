@@ -1,15 +1,12 @@
 package dev.settlewell.syntax;
 
-import dev.settlewell.text.Place;
 import dev.settlewell.text.Problem;
 import dev.settlewell.text.SourceText;
 import dev.settlewell.text.Span;
-import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
-import java.util.TreeMap;
 
 /**
  * One reading of one text: patches what is known to be no YAML, has the rest parsed, and where the
@@ -22,42 +19,48 @@ final class Reader {
   /** Characters read in all tries together: bounds the time on long texts. */
   private static final long MAX_WORK = 20_000_000;
 
+  /** More than anybody reads, and than an editor shows with ease. */
+  private static final int MAX_PROBLEMS = 500;
+
   private final SourceText text;
-  private final Set<String> textKeys;
-  private final Draft draft;
-  private final TreeMap<Integer, Span> broken = new TreeMap<>();
-  private final List<Problem> problems = new ArrayList<>();
+  private final Mending mending;
 
   Reader(SourceText text, Set<String> textKeys) {
     this.text = text;
-    this.textKeys = textKeys;
-    this.draft = new Draft(text.content());
+    this.mending = new Mending(text, textKeys);
   }
 
   SyntaxTree read() {
     if (text.length() > Syntax.MAX_LENGTH) {
-      report(new Span(0, 0), "longer than 3 MB: this is not read as a sheet");
-      return new SyntaxTree(text, emptyRoot(), problems, List.of());
+      mending.syntax(0, 0, "longer than 3 MB: this is not read as a sheet");
+      return new SyntaxTree(text, emptyRoot(), mending.problems, List.of());
     }
-    new Characters(text, draft, problems).clean();
+    mend();
     TreeBuilder builder = null;
     Optional<Node> root = Optional.empty();
     long work = 0;
-    for (int tries = 0; tries < MAX_TRIES && work < MAX_WORK; tries++) {
+    for (int tries = 0; builder == null || tries < MAX_TRIES && work < MAX_WORK; tries++) {
       work += text.length();
-      Draft.Rendered rendered = draft.render();
-      builder = new TreeBuilder(text, rendered, broken);
+      Draft.Rendered rendered = mending.draft.render();
+      builder = new TreeBuilder(text, rendered, mending.broken);
       root = builder.build();
-      if (builder.failure().isEmpty()) {
-        break;
-      }
-      Events.Failure failure = builder.failure().get();
-      if (!takeOut(rendered.offset(failure.index()), failure.message())) {
+      Optional<Events.Failure> failure = builder.failure();
+      if (failure.isEmpty()
+          || !takeOut(rendered.offset(failure.get().index()), failure.get().message())) {
         break;
       }
     }
-    problems.addAll(builder.problems());
+    mending.problems.addAll(builder.problems());
     return tree(builder, root);
+  }
+
+  private void mend() {
+    Characters characters = new Characters(mending);
+    characters.clean();
+    new Conflicts(mending).takeOut();
+    new Tabs(mending).mendIndentation();
+    new BlockScan(mending).scan();
+    characters.blankTabs();
   }
 
   private SyntaxTree tree(TreeBuilder builder, Optional<Node> root) {
@@ -65,71 +68,54 @@ final class Reader {
     if (root.isPresent() && root.get() instanceof Node.Mapping m) {
       mapping = m;
     } else if (root.isPresent() && !(root.get() instanceof Node.Absent)) {
-      report(
-          root.get().place().span(),
-          "a sheet is made of keys and values, such as `channel-sheet: 1`");
+      Span span = root.get().place().span();
+      mending.syntax(
+          span.start(), span.end(), "a sheet is made of keys and values: `channel-sheet: 1`");
     }
-    problems.sort(Comparator.comparingInt((Problem p) -> p.place().start()));
+    List<Problem> problems =
+        mending.problems.stream()
+            .sorted(Comparator.comparingInt(p -> p.place().start()))
+            .limit(MAX_PROBLEMS)
+            .toList();
     return new SyntaxTree(text, mapping, problems, Comments.of(text, builder.scalars()));
   }
 
-  /** Takes the value, else the line, else everything from there on out of the draft. */
-  private boolean takeOut(int offset, String reason) {
-    int number = text.lineAt(Math.min(offset, text.length()));
+  /** Takes the value the parser failed on out of the draft, else its line, else the line above. */
+  private boolean takeOut(int offset, String complaint) {
+    int number = text.lineAt(offset);
     while (number > 0 && isEmpty(number)) {
       number--;
     }
     if (isEmpty(number)) {
       return false;
     }
-    Span line = text.line(number);
-    int start = contentStart(line);
-    Span out = new Span(start, Math.max(start, contentEnd(line)));
-    report(out, Messages.of(reason, text.slice(out)));
-    int colon = text.slice(out).indexOf(": ");
-    int value = colon < 0 ? -1 : start + colon + 1;
-    if (value > 0 && !draft.isBlank(value, out.end())) {
-      while (text.content().charAt(value) == ' ') {
-        value++;
-      }
-      broken.put(value, new Span(value, out.end()));
-      draft.blank(value, line.end());
+    Mending.Row row = mending.row(number);
+    int start = row.content();
+    int end = Math.max(start, row.end());
+    int colon = text.slice(new Span(start, end)).indexOf(": ");
+    int value = mending.skipBlanks(start + colon + 1);
+    boolean valueFails = colon > 0 && value < end && !mending.draft.isBlank(value, end);
+    if (mending.problems.stream().noneMatch(p -> onLine(p, row))) {
+      mending.syntax(valueFails ? value : start, end, Messages.of(complaint));
+    }
+    if (valueFails) {
+      mending.breakOff(value, end);
     } else {
-      draft.blank(start, line.end());
+      mending.draft.blank(row.start(), end);
     }
     return true;
   }
 
+  private static boolean onLine(Problem problem, Mending.Row row) {
+    return problem.place().start() >= row.start() && problem.place().start() <= row.end();
+  }
+
   private boolean isEmpty(int number) {
-    Span line = text.line(number);
-    return draft.isBlank(line.start(), line.end())
-        || text.slice(line).stripLeading().startsWith("#");
-  }
-
-  private int contentStart(Span line) {
-    int at = line.start();
-    while (at < line.end() && text.content().charAt(at) <= ' ') {
-      at++;
-    }
-    return at;
-  }
-
-  private int contentEnd(Span line) {
-    int end = line.end();
-    while (end > line.start() && text.content().charAt(end - 1) <= ' ') {
-      end--;
-    }
-    return end;
+    Mending.Row row = mending.row(number);
+    return mending.empty(row) || mending.draft.isBlank(row.start(), row.end());
   }
 
   private Node.Mapping emptyRoot() {
     return new Node.Mapping(List.of(), text.place(0, 0), false);
-  }
-
-  private void report(Span span, String message) {
-    Place place = text.place(span);
-    if (problems.stream().noneMatch(p -> p.place().span().overlaps(span))) {
-      problems.add(new Problem(Problem.Kind.SYNTAX, place, message));
-    }
   }
 }

@@ -120,7 +120,8 @@ final class TreeBuilder {
       entry(key, value).ifPresent(entries::add);
     }
     Place place = close(start, extent);
-    return new Node.Mapping(entries, place, start.isFlow());
+    List<Node.Entry> read = start.isFlow() ? Slips.splitByComma(source, entries, problems) : entries;
+    return new Node.Mapping(read, place, start.isFlow());
   }
 
   private Optional<Node.Entry> entry(Node key, Node value) {
@@ -131,6 +132,9 @@ final class TreeBuilder {
                 name.place(),
                 "`<<` does not merge keys in a sheet: write the keys themselves here"));
         return Optional.empty();
+      }
+      if (value instanceof Node.Sequence list && Slips.STAGE_LISTS.contains(name.text())) {
+        return Optional.of(new Node.Entry(name, Slips.stages(source, list, problems)));
       }
       return Optional.of(new Node.Entry(name, value));
     }
@@ -310,7 +314,7 @@ final class TreeBuilder {
       }
     }
     Place place = source.place(draft.span(from, to));
-    problems.add(problem(place, "nested deeper than " + MAX_DEPTH + " levels; nothing needs that"));
+    problems.add(problem(place, Messages.tooDeep()));
     return new Node.Broken(place);
   }
 

@@ -1,0 +1,104 @@
+package dev.settlewell.syntax;
+
+import dev.settlewell.syntax.Mending.Row;
+import dev.settlewell.text.Span;
+
+/** Finds where a quoted text ends, and closes one that was left open. */
+final class Quotes {
+  private final Mending mending;
+
+  Quotes(Mending mending) {
+    this.mending = mending;
+  }
+
+  /** Behind the closing quote on the same line; -1 where there is none. */
+  int endOnLine(int open, int lineEnd) {
+    char quote = mending.draft.at(open);
+    int at = open + 1;
+    while (at < lineEnd) {
+      char c = mending.draft.at(at);
+      if (c == '\\' && quote == '"') {
+        at++;
+      } else if (c == quote) {
+        if (quote == '\'' && at + 1 < lineEnd && mending.draft.at(at + 1) == '\'') {
+          at++;
+        } else {
+          return at + 1;
+        }
+      }
+      at++;
+    }
+    return -1;
+  }
+
+  /**
+   * Behind the quoted text that opens here. It may go on over lines indented deeper than {@code
+   * base}, as YAML demands; one that is not closed before a line that is not is closed at the end
+   * of its first line.
+   *
+   * @param closers how many brackets are open around it: those at the line's end are not its text
+   */
+  int end(int open, int base, int closers) {
+    Row row = mending.row(mending.text.lineAt(open));
+    int end = endOnLine(open, row.end());
+    if (end < 0) {
+      end = endBelow(open, row.number(), base);
+    }
+    if (end < 0) {
+      return close(open, row, closers);
+    }
+    mending.verbatim.add(new Span(open, end));
+    return end;
+  }
+
+  private int endBelow(int open, int number, int base) {
+    int last = number;
+    while (true) {
+      int next = last + 1;
+      while (next < mending.text.lineCount()
+          && mending.row(next).content() >= mending.row(next).end()) {
+        next++;
+      }
+      if (next >= mending.text.lineCount() || mending.row(next).indent() <= base) {
+        break;
+      }
+      last = next;
+    }
+    return last == number ? -1 : endOnLine(open, mending.row(last).end());
+  }
+
+  private int close(int open, Row row, int closers) {
+    int end = row.end();
+    int left = closers;
+    while (left > 0 && end > open + 1 && closer(mending.draft.at(end - 1))) {
+      end = mending.trimmed(open + 1, end - 1);
+      left--;
+    }
+    String quote = String.valueOf(mending.draft.at(open));
+    String message = "this quote is not closed: write " + quote + " where its text ends";
+    mending.syntax(
+        open,
+        end,
+        message,
+        mending.guess("Close the quote", mending.edit(end, end, quote)));
+    if (quote.equals("\"") && endsInEscape(open, end)) {
+      mending.breakOff(open, end);
+    } else {
+      mending.draft.insert(end, quote);
+      mending.verbatim.add(new Span(open, end));
+    }
+    return end;
+  }
+
+  private boolean endsInEscape(int open, int end) {
+    int slashes = 0;
+    while (end - 1 - slashes > open && mending.draft.at(end - 1 - slashes) == '\\') {
+      slashes++;
+    }
+    return slashes % 2 == 1;
+  }
+
+  static boolean closer(char c) {
+    return c == ']' || c == '}';
+  }
+}
