@@ -211,8 +211,16 @@ final class SymmetricSum {
   }
 
   private static void timesBessel(double[] phi, double step) {
+    double c1 = FastMath.cos(step);
+    double s1 = FastMath.sin(step);
+    double c = c1;
+    double s = s1;
     for (int k = 1; k < phi.length; k++) {
-      phi[k] *= Bessel.j0(k * step);
+      double x = k * step;
+      phi[k] *= x < Bessel.FAR ? Bessel.j0(x) : Bessel.j0Far(x, c, s);
+      double turned = c * c1 - s * s1;
+      s = s * c1 + c * s1;
+      c = turned;
     }
   }
 

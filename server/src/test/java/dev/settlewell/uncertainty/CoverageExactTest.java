@@ -125,6 +125,10 @@ class CoverageExactTest {
   void besselFunction() {
     for (double x = 0; x < 400; x += 0.37) {
       assertThat(Bessel.j0(x)).as("J0(%s)", x).isCloseTo(BesselJ.value(0, x), within(6e-8));
+      if (x >= Bessel.FAR) {
+        double far = Bessel.j0Far(x, Math.cos(x), Math.sin(x));
+        assertThat(far).as("J0(%s)", x).isCloseTo(BesselJ.value(0, x), within(1e-8));
+      }
     }
   }
 }
