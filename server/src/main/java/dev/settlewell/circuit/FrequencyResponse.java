@@ -139,6 +139,41 @@ public final class FrequencyResponse {
         });
   }
 
+  /**
+   * Impedance in ohms, seen back from the last node of the chain; infinite where nothing holds it.
+   */
+  public static Complex outputImpedance(
+      double sourceOhms, List<? extends Element> chain, double hertz) {
+    return Thevenin.of(sourceOhms, chain, hertz).impedance();
+  }
+
+  /**
+   * Magnitude in ohms of the load that passive elements, the closed switch and the hold capacitor
+   * put on what drives them; infinite at 0 Hz where no resistor leads to a fixed potential.
+   */
+  public static double loadOhms(List<Rung> ladder, Sampler sampler, double hertz) {
+    List<Element> whole = acquiring(ladder, sampler);
+    // Voltage and current at the end of an open line, carried back to its start.
+    Complex volts = Complex.ONE;
+    Complex amperes = Complex.ZERO;
+    for (int i = whole.size() - 1; i >= 0; i--) {
+      if (whole.get(i) instanceof Rung.Series series) {
+        volts = volts.add(amperes.multiply(series.ohms()));
+      } else if (whole.get(i) instanceof Rung.Capacitor capacitor) {
+        double siemens = 2 * FastMath.PI * hertz * capacitor.farads();
+        amperes = amperes.add(volts.multiply(new Complex(0, siemens)));
+      } else if (whole.get(i) instanceof Rung.Parallel parallel) {
+        if (parallel.ohms() == 0) {
+          volts = Complex.ZERO;
+          amperes = Complex.ONE;
+        } else {
+          amperes = amperes.add(volts.divide(parallel.ohms()));
+        }
+      }
+    }
+    return volts.abs() / amperes.abs();
+  }
+
   /** The chain with the closed switch and the hold capacitor behind it. */
   static List<Element> acquiring(List<? extends Element> chain, Sampler sampler) {
     List<Element> whole = new ArrayList<>(chain);

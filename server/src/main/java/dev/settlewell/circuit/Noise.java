@@ -2,6 +2,7 @@ package dev.settlewell.circuit;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.function.DoubleUnaryOperator;
 import org.apache.commons.math3.util.FastMath;
 
 /**
@@ -65,24 +66,56 @@ public final class Noise {
   }
 
   /**
-   * Thermal noise of a passive network at its hold capacitor, in V: the square root of the integral
-   * of {@code 4kT Re(Z)} over frequency, Z being what the hold capacitor's node shows (Nyquist
-   * 1928).
+   * Thermal noise of a path's resistances at its hold capacitor, in V: the square root of the
+   * integral of {@code 4kT Re(Z)} over frequency, Z being what the hold capacitor's node shows
+   * (Nyquist 1928). What a section before a buffer shows passes the buffer and all that follows.
    *
-   * <p>Where the switch has a resistance this is {@code sqrt(kT/C_hold)}, whatever the network
-   * (equipartition). Without any resistance it is the limit of a vanishing one: all capacitors in
-   * parallel.
+   * <p>For a passive path behind a switch with resistance this is {@code sqrt(kT/C_hold)}, whatever
+   * the network (equipartition). A last section without any resistance is the limit of a vanishing
+   * one: its capacitors in parallel. An amplifier's own noise is {@link #amplifier}. Infinite where
+   * nothing limits the noise of an earlier section.
    */
   public static double thermalAtHold(
-      double kelvin, double sourceOhms, List<? extends Rung> ladder, Sampler sampler) {
-    List<Element> whole = FrequencyResponse.acquiring(ladder, sampler);
+      double kelvin, double sourceOhms, List<? extends Element> chain, Sampler sampler) {
+    List<Element> whole = FrequencyResponse.acquiring(chain, sampler);
+    double driveOhms = sourceOhms;
+    int from = 0;
+    double ohmHertz = 0;
+    for (int i = 0; i < whole.size(); i++) {
+      if (!(whole.get(i) instanceof Rung)) {
+        ohmHertz += passedOn(sourceOhms, whole, i);
+        driveOhms = Spectrum.drivingOhms(whole.get(i));
+        from = i + 1;
+      }
+    }
+    List<Element> last = whole.subList(from, whole.size());
+    ohmHertz +=
+        Spectrum.of(driveOhms, last).hasPoles()
+            ? passedOn(sourceOhms, whole, whole.size())
+            : 1 / (4 * totalFarads(last));
+    return Math.sqrt(4 * BOLTZMANN * kelvin * ohmHertz);
+  }
+
+  /** The integral of Re(Z) before the element {@code at}, times the power gain from there on. */
+  private static double passedOn(double sourceOhms, List<Element> whole, int at) {
+    List<Element> before = whole.subList(0, at);
+    List<Element> behind = whole.subList(at, whole.size());
+    DoubleUnaryOperator density =
+        hertz -> {
+          double gain = FrequencyResponse.gain(0, behind, hertz);
+          double ohms = Thevenin.of(sourceOhms, before, hertz).impedance().getReal();
+          return ohms * gain * gain;
+        };
     Spectrum spectrum = Spectrum.of(sourceOhms, whole);
     if (!spectrum.hasPoles()) {
-      return holdCapacitor(kelvin, totalFarads(whole));
+      return density.applyAsDouble(0) == 0 ? 0 : Double.POSITIVE_INFINITY;
     }
-    double ohmHertz =
-        spectrum.integral(hertz -> Thevenin.of(sourceOhms, whole, hertz).impedance().getReal());
-    return Math.sqrt(4 * BOLTZMANN * kelvin * ohmHertz);
+    double inside = density.applyAsDouble(spectrum.low()) + density.applyAsDouble(spectrum.high());
+    double beyond = density.applyAsDouble(1e9 * spectrum.high());
+    if (inside == 0) {
+      return 0;
+    }
+    return beyond < 1e-9 * inside ? spectrum.integral(density) : Double.POSITIVE_INFINITY;
   }
 
   private static double totalFarads(List<Element> chain) {

@@ -100,7 +100,8 @@ record Spectrum(double low, double high) {
     return spectrum;
   }
 
-  private static double drivingOhms(Element buffer) {
+  /** The resistance that a buffer can show to what it drives. */
+  static double drivingOhms(Element buffer) {
     if (buffer instanceof Amplifier amplifier) {
       return Double.isInfinite(amplifier.poleHertz()) ? 0 : amplifier.outputOhms();
     }

@@ -34,7 +34,7 @@ record Thevenin(Complex v, Complex a, Complex b) {
   }
 
   Complex impedance() {
-    return a.divide(b);
+    return b.equals(Complex.ZERO) ? Complex.INF : a.divide(b);
   }
 
   private Thevenin then(Element element, double hertz) {

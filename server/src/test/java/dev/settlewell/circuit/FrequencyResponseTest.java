@@ -131,7 +131,25 @@ class FrequencyResponseTest {
     }
   }
 
-  /** Random ladders, some with buffers, against nodal analysis by a general-purpose LU solver. */
+  /** By hand: 100 ohms, then 1 kOhm to ground beside a capacitor of 1 kOhm at this frequency. */
+  @Test
+  void impedancesFromBothSides() {
+    List<Rung> ladder =
+        List.of(new Rung.Series(100), new Rung.Parallel(1e3), new Rung.Capacitor(C));
+    Sampler nothing = new Sampler(0, 1e-30);
+    assertThat(FrequencyResponse.loadOhms(ladder, nothing, POLE))
+        .isCloseTo(FastMath.hypot(600, 500), within(1e-9));
+    assertThat(FrequencyResponse.loadOhms(ladder, nothing, 0)).isCloseTo(1100, within(1e-9));
+    assertThat(FrequencyResponse.loadOhms(List.of(), new Sampler(1e3, C), 0)).isInfinite();
+    assertThat(FrequencyResponse.loadOhms(List.of(new Rung.Parallel(0)), nothing, 5)).isZero();
+    Complex back = FrequencyResponse.outputImpedance(900, ladder, POLE);
+    assertThat(back.subtract(new Complex(0.4, -0.2).multiply(1e3)).abs()).isLessThan(1e-9);
+    assertThat(
+            FrequencyResponse.outputImpedance(Double.POSITIVE_INFINITY, List.of(), 0).isInfinite())
+        .isTrue();
+  }
+
+  /** Random ladders against nodal analysis by a general-purpose LU solver. */
   @Test
   void agreesWithNodalAnalysis() {
     for (int seed = 0; seed < 200; seed++) {

@@ -84,6 +84,36 @@ class NoiseTest {
         .isCloseTo(together, within(1e-9 * together));
   }
 
+  /**
+   * An RC section before an amplifier of gain 20: kT/C of that section, 20 times larger, beside
+   * kT/C of the hold capacitor (equipartition in both sections; their noise is independent).
+   */
+  @Test
+  void thermalNoiseBeforeAnAmplifierIsAmplified() {
+    List<Element> chain =
+        List.of(
+            new Rung.Series(5e3),
+            new Rung.Capacitor(1e-9),
+            new Amplifier(20, 1e12, 0),
+            new Rung.Series(100));
+    double before = 20 * Noise.holdCapacitor(300, 1e-9);
+    double held = Noise.holdCapacitor(300, 1e-11);
+    double both = Math.sqrt(before * before + held * held);
+    assertThat(Noise.thermalAtHold(300, 2e3, chain, new Sampler(0, 1e-11)))
+        .isCloseTo(both, within(1e-3 * both));
+    // Without a capacitor the amplifier's pole limits it: sqrt(4kTR pi/2 f) (handbook).
+    List<Element> bare = List.of(new Rung.Series(5e3), new Amplifier(20, 1e4, 0));
+    double limited = 20 * Noise.johnsonDensity(300, 7e3) * Math.sqrt(FastMath.PI / 2 * 1e4);
+    assertThat(Noise.thermalAtHold(300, 2e3, bare, new Sampler(1, 1e-9)))
+        .isCloseTo(FastMath.hypot(limited, Noise.holdCapacitor(300, 1e-9)), within(1e-3 * limited));
+    List<Element> ideal = List.of(new Amplifier(20, Double.POSITIVE_INFINITY, 0));
+    assertThat(Noise.thermalAtHold(300, 2e3, ideal, new Sampler(0, 1e-9))).isInfinite();
+    assertThat(Noise.thermalAtHold(300, 0, ideal, new Sampler(0, 1e-11))).isEqualTo(held);
+    List<Element> driven = List.of(new Amplifier(20, 1e6, 50));
+    assertThat(Noise.thermalAtHold(300, 0, driven, new Sampler(0, 1e-11)))
+        .isCloseTo(held, within(1e-8 * held));
+  }
+
   /** Analog Devices MT-001: 6.02 N + 1.76 dB. */
   @ParameterizedTest
   @CsvSource({"8, 49.92", "10, 61.96", "12, 74.0", "14, 86.04", "16, 98.08"})
