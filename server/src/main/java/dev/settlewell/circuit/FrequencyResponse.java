@@ -5,6 +5,12 @@ import java.util.List;
 import java.util.OptionalDouble;
 import org.apache.commons.math3.analysis.solvers.BrentSolver;
 import org.apache.commons.math3.complex.Complex;
+import org.apache.commons.math3.optim.MaxEval;
+import org.apache.commons.math3.optim.nonlinear.scalar.GoalType;
+import org.apache.commons.math3.optim.univariate.BrentOptimizer;
+import org.apache.commons.math3.optim.univariate.SearchInterval;
+import org.apache.commons.math3.optim.univariate.UnivariateObjectiveFunction;
+import org.apache.commons.math3.optim.univariate.UnivariatePointValuePair;
 import org.apache.commons.math3.util.FastMath;
 
 /**
@@ -64,6 +70,48 @@ public final class FrequencyResponse {
       double sourceOhms, List<? extends Element> chain, double hertz) {
     double atDc = gain(sourceOhms, chain, 0);
     return atDc == 0 ? 0 : gain(sourceOhms, chain, hertz) / atDc;
+  }
+
+  /**
+   * The largest absolute magnitude, V/V, for a line anywhere from {@code lowHertz} to {@code
+   * highHertz}. A passive path has real poles only, so that its gain falls with frequency;
+   * resonances of buffers are searched on a grid of {@value #STEPS_A_DECADE} steps a decade and
+   * then exactly.
+   */
+  public static double worstGain(
+      double sourceOhms,
+      List<? extends Element> chain,
+      Sampler sampler,
+      double lowHertz,
+      double highHertz) {
+    List<Element> whole = acquiring(chain, sampler);
+    double worst = gain(sourceOhms, whole, lowHertz);
+    if (whole.stream().allMatch(Rung.class::isInstance) || !(lowHertz < highHertz)) {
+      return worst;
+    }
+    Spectrum spectrum = Spectrum.of(sourceOhms, whole);
+    // Below a hundredth of the lowest pole nothing bends, and a logarithm wants no zero.
+    double from = FastMath.log10(Math.max(lowHertz, Math.min(highHertz, spectrum.low()) / 100));
+    double to = FastMath.log10(highHertz);
+    int steps = 2 + (int) ((to - from) * STEPS_A_DECADE);
+    double step = (to - from) / steps;
+    double best = from;
+    for (int i = 0; i <= steps; i++) {
+      double decades = from + i * step;
+      double gain = gain(sourceOhms, whole, FastMath.pow(10, decades));
+      if (gain > worst) {
+        worst = gain;
+        best = decades;
+      }
+    }
+    UnivariatePointValuePair peak =
+        new BrentOptimizer(1e-9, 1e-12)
+            .optimize(
+                new MaxEval(200),
+                GoalType.MAXIMIZE,
+                new UnivariateObjectiveFunction(x -> gain(sourceOhms, whole, FastMath.pow(10, x))),
+                new SearchInterval(Math.max(from, best - step), Math.min(to, best + step), best));
+    return Math.max(worst, peak.getValue());
   }
 
   /** Absolute magnitudes, V/V, at each of the frequencies. */

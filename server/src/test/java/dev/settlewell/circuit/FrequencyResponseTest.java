@@ -131,6 +131,26 @@ class FrequencyResponseTest {
     }
   }
 
+  /** Second order with Q = 5: its peak Q/sqrt(1 - 1/(4 Q^2)) lies at f_0 sqrt(1 - 1/(2 Q^2)). */
+  @Test
+  void worstGainOverALinesTolerance() {
+    double q = 25;
+    List<Element> ringing =
+        List.of(new Amplifier(1, 1e6, 100), new Rung.Capacitor(q / (2 * FastMath.PI * 1e6 * 100)));
+    Sampler nothing = new Sampler(0, 1e-30);
+    double peak = 5 / FastMath.sqrt(1 - 1 / (4 * q));
+    for (double low : new double[] {0, 1e4, 1e5, 1.8e5}) {
+      assertThat(FrequencyResponse.worstGain(0, ringing, nothing, low, 2.5e5))
+          .isCloseTo(peak, within(1e-9));
+    }
+    double before = FrequencyResponse.gain(0, ringing, nothing, 1.5e5);
+    assertThat(FrequencyResponse.worstGain(0, ringing, nothing, 50, 1.5e5))
+        .isCloseTo(before, within(1e-12));
+    List<Element> passive = List.of(new Rung.Series(R));
+    assertThat(FrequencyResponse.worstGain(0, passive, new Sampler(0, C), POLE, 2 * POLE))
+        .isCloseTo(FastMath.sqrt(0.5), within(1e-12));
+  }
+
   /** By hand: 100 ohms, then 1 kOhm to ground beside a capacitor of 1 kOhm at this frequency. */
   @Test
   void impedancesFromBothSides() {
