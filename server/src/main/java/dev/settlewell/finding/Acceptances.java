@@ -1,6 +1,7 @@
 package dev.settlewell.finding;
 
 import dev.settlewell.finding.catalog.Catalog;
+import dev.settlewell.sheet.Linked;
 import dev.settlewell.sheet.Named;
 import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Sheet;
@@ -57,11 +58,15 @@ final class Acceptances {
 
   private final Sheet sheet;
   private final LocalDate date;
+  private final boolean clear;
   private final List<Entry> entries;
 
-  Acceptances(Sheet sheet, LocalDate date) {
-    this.sheet = sheet;
-    this.date = date;
+  Acceptances(Linked linked) {
+    this.sheet = linked.sheet();
+    this.date = linked.date();
+    this.clear =
+        Stream.of(sheet.problems(), sheet.tree().problems(), linked.problems())
+            .allMatch(List::isEmpty);
     this.entries =
         Stream.of(sheet.channels(), sheet.scans(), sheet.converters())
             .flatMap(named -> entries(named).stream())
@@ -178,7 +183,7 @@ final class Acceptances {
     boolean converterElsewhere =
         sheet.converters().containsKey(entry.subject()) && sheet.scans().isEmpty();
     boolean known = Catalog.NAMES.contains(entry.name());
-    return known && !converterElsewhere && sheet.problems().isEmpty();
+    return known && !converterElsewhere && clear;
   }
 
   private Finding unused(Entry entry) {

@@ -49,7 +49,7 @@ public final class Findings {
     raised.addAll(faultsOfFigures(analysis));
     List<Finding> uncovered = new Covers(checks).uncovered(raised);
     List<Finding> own = uncovered.stream().map(f -> atHome(f, sheet)).toList();
-    List<Finding> judged = new Acceptances(sheet, analysis.linked().date()).apply(own, raised);
+    List<Finding> judged = new Acceptances(analysis.linked()).apply(own, raised);
     Severities severities = Severities.of(sheet);
     return judged.stream()
         .map(severities::apply)

@@ -40,7 +40,8 @@ final class UnusedName implements Check {
   @Override
   public void run(Analysis analysis, Consumer<Finding> report) {
     Sheet sheet = analysis.linked().sheet();
-    if (sheet.channels().isEmpty() || !sheet.problems().isEmpty()) {
+    boolean broken = !sheet.problems().isEmpty() || !sheet.tree().problems().isEmpty();
+    if (sheet.channels().isEmpty() || broken) {
       return;
     }
     Set<String> used = new HashSet<>();

@@ -1,0 +1,66 @@
+package dev.settlewell.finding;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import dev.settlewell.finding.catalog.Catalog;
+import java.util.List;
+import java.util.stream.Stream;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** Every page has all its sections, and its two sheets are what it says they are. */
+class PagesTest {
+  static Stream<String> names() {
+    // Those that need sheets put together, and the figures, come with them.
+    return Catalog.CHECKS.stream()
+        .map(Check::name)
+        .filter(name -> Pages.of(name).isPresent())
+        .filter(name -> !name.equals("unknown-name") && !name.startsWith("use-"));
+  }
+
+  @ParameterizedTest
+  @MethodSource("names")
+  void hasEverySection(String name) {
+    Pages.Page page = Pages.of(name).orElseThrow();
+    assertThat(page.text()).startsWith("# " + name + "\n");
+    assertThat(page.sections().keySet()).containsExactlyElementsOf(Pages.SECTIONS);
+    assertThat(page.sections().values()).allSatisfy(text -> assertThat(text).isNotBlank());
+    assertThat(page.text()).doesNotContain("<").doesNotContain("\n|");
+    assertThat(page.summary()).endsWith(".").doesNotContain("\n");
+  }
+
+  @ParameterizedTest
+  @MethodSource("names")
+  void theFirstSheetHasIt(String name) {
+    String sheet = Pages.of(name).orElseThrow().sheet("A sheet that has it").orElseThrow();
+    Judged judged = Judged.sheet(sheet);
+    List<String> others =
+        judged.findings().stream()
+            .filter(f -> !f.isAccepted() && f.severity().atLeast(Severity.WARNING))
+            .map(Finding::name)
+            .filter(other -> !other.equals(name))
+            .filter(other -> !isNamedOnPage(name, other))
+            .toList();
+    assertThat(judged.names()).as("%s", judged.shown()).contains(name);
+    assertThat(others).as("%s", judged.shown()).isEmpty();
+  }
+
+  /** A page whose sheet cannot but have another finding too says so by its name. */
+  private static boolean isNamedOnPage(String name, String other) {
+    return Pages.of(name)
+        .flatMap(page -> page.section("A sheet that has it"))
+        .map(section -> section.contains("`" + other + "`"))
+        .orElse(false);
+  }
+
+  @ParameterizedTest
+  @MethodSource("names")
+  void theSecondSheetIsClean(String name) {
+    String sheet = Pages.of(name).orElseThrow().sheet("A sheet that has it not").orElseThrow();
+    Judged judged = Judged.sheet(sheet);
+    assertThat(judged.names()).as("%s", judged.shown()).doesNotContain(name);
+    assertThat(judged.findings())
+        .as("%s", judged.shown())
+        .noneMatch(f -> !f.isAccepted() && f.severity().atLeast(Severity.WARNING));
+  }
+}
