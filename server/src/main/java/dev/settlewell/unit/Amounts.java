@@ -2,6 +2,7 @@ package dev.settlewell.unit;
 
 import dev.settlewell.text.Problem;
 import dev.settlewell.unit.Token.Kind;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 
@@ -84,18 +85,29 @@ final class Amounts {
   /** The unit behind a number, of a dimension that is expected here. */
   Unit unit(Numeral numeral, Expected expected) {
     Token word = cursor.peek();
+    Unit unit = anyUnit(numeral, expected, UnitSlips.likely(expected));
+    if (!UnitSlips.accepts(expected, unit)) {
+      throw UnitSlips.wrong(cursor, word.from(), unitEnd(numeral.to()), unit, expected);
+    }
+    return unit;
+  }
+
+  /** The unit behind a number, whatever it measures. */
+  Unit anyUnit(Numeral numeral, Expected expected, List<String> likely) {
+    Token word = cursor.peek();
     if (!word.is(Kind.WORD) || Leftovers.isGrammarWord(word.text())) {
-      throw missing(numeral, expected);
+      throw missing(numeral, expected, likely);
     }
     cursor.take();
     Token joined = joined(word);
     Optional<Unit> known = UnitTable.read(joined.text());
-    Unit unit =
-        known.isPresent() ? known.get() : UnitSlips.meant(cursor, numeral, joined, expected);
-    if (!UnitSlips.accepts(expected, unit)) {
-      throw UnitSlips.wrong(cursor, numeral, joined, unit, expected);
-    }
-    return unit;
+    return known.isPresent() ? known.get() : UnitSlips.meant(cursor, numeral, joined, expected);
+  }
+
+  /** Where the text that was read last ends, the unit behind a number as a rule. */
+  int unitEnd(int from) {
+    String between = cursor.text(from, Math.max(from, cursor.peek().from()));
+    return from + between.stripTrailing().length();
   }
 
   /** {@code k Ω} as {@code kΩ}, where only the blank is wrong. */
@@ -122,10 +134,20 @@ final class Amounts {
     return whole;
   }
 
-  private RuntimeException missing(Numeral numeral, Expected expected) {
+  /** Four digits and more of ohms are plain ohms. */
+  private static List<String> bySize(List<String> likely, Numeral numeral) {
+    boolean ohms = likely.equals(UnitTable.likely(Dimension.RESISTANCE));
+    return ohms && Math.abs(numeral.times(0)) >= 1000 ? List.of("Ω") : likely;
+  }
+
+  private RuntimeException missing(Numeral numeral, Expected expected, List<String> likely) {
     String number = cursor.text(numeral.from(), numeral.to());
-    List<String> spellings =
-        UnitSlips.likely(expected).stream().map(unit -> numeral.digits() + " " + unit).toList();
+    List<String> spellings = new ArrayList<>(Marking.meant(number, expected));
+    if (numeral.times(0) == 0 && UnitSlips.base(expected).isPresent()) {
+      spellings.add(0, "0 " + UnitSlips.base(expected).get());
+    } else {
+      bySize(likely, numeral).forEach(unit -> spellings.add(numeral.digits() + " " + unit));
+    }
     String why = "a value carries its unit";
     if (spellings.isEmpty()) {
       why = number + " has no unit: " + why;

@@ -3,6 +3,7 @@ package dev.settlewell.unit;
 import dev.settlewell.text.Problem;
 import dev.settlewell.unit.Token.Kind;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.Function;
 
 /** Walks through the tokens of one value, and keeps what was found wrong on the way. */
@@ -42,7 +43,7 @@ final class Cursor {
   private <T> Reading<T> reading(T value) {
     boolean certain = value != null && flaws.leaveMeaning();
     return new Reading<>(
-        certain ? java.util.Optional.of(value) : java.util.Optional.empty(), flaws.finished());
+        certain ? Optional.of(value) : Optional.empty(), flaws.finished());
   }
 
   Token peek() {
@@ -99,6 +100,13 @@ final class Cursor {
   RuntimeException refuse(
       Problem.Kind kind, int from, int to, String why, List<String> spellings) {
     note(kind, from, to, why, false, spellings);
+    return new Refusal();
+  }
+
+  /** Gives the value up although what is meant is certain: the mended text says it. */
+  RuntimeException mend(
+      Problem.Kind kind, int from, int to, String why, String spelling) {
+    note(kind, from, to, why, true, List.of(spelling));
     return new Refusal();
   }
 

@@ -4,6 +4,7 @@ import dev.settlewell.text.Problem;
 import dev.settlewell.unit.Token.Kind;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalInt;
 
@@ -11,9 +12,20 @@ import java.util.OptionalInt;
 final class Errors {
   private static final Expected POINT = Expected.of(Dimension.TEMPERATURE);
 
+  /** What data sheets print behind a percentage, and the words of the grammar. */
+  private static final Map<String, String> SHARES =
+      Map.of(
+          "FS", "of full scale",
+          "FSR", "of full scale",
+          "fs", "of full scale",
+          "rdg", "of reading",
+          "reading", "of reading",
+          "span", "of span");
+
   private final Cursor cursor;
   private final Amounts amounts;
   private final Expected expected;
+  private final boolean ofValue;
   private final List<Tolerance> tolerances = new ArrayList<>();
   private Optional<Drift> drift = Optional.empty();
   private Optional<Basis> basis = Optional.empty();
@@ -21,8 +33,10 @@ final class Errors {
   /**
    * @param expected the units that tolerances and drifts may have, as {@link #ofValue} or the key
    *     says
+   * @param ofValue true behind a value, where a bare number is most likely a percentage
    */
-  Errors(Cursor cursor, Expected expected) {
+  Errors(Cursor cursor, Expected expected, boolean ofValue) {
+    this.ofValue = ofValue;
     this.cursor = cursor;
     this.amounts = new Amounts(cursor);
     this.expected = expected;
@@ -49,6 +63,7 @@ final class Errors {
     if (!some) {
       return Deviation.NONE;
     }
+    bareBasis();
     if (cursor.isNext(Kind.OPEN)) {
       basis = Optional.of(basis());
     }
@@ -76,6 +91,9 @@ final class Errors {
   }
 
   private RuntimeException nothing() {
+    if (cursor.isNext(Kind.OPEN)) {
+      return Leftovers.refusal(cursor);
+    }
     List<String> likely = UnitSlips.likely(expected);
     String example = "±1 " + (likely.isEmpty() ? "%" : likely.get(0));
     Token token = cursor.peek();
@@ -107,16 +125,35 @@ final class Errors {
       cursor.take();
       signBehind(sign);
     }
-    Token first = cursor.peek();
     Numeral numeral = amounts.number(expected, "");
     Token word = cursor.peek();
-    Optional<Unit> numerator =
-        word.is(Kind.WORD) ? UnitTable.numeratorPerKelvin(word.text()) : Optional.empty();
+    Unit unit = amounts.anyUnit(numeral, withDrifts(), likely());
+    Optional<Unit> numerator = UnitTable.numeratorPerKelvin(unit.written());
     if (numerator.isPresent()) {
-      drift(sign, numeral, numerator.get());
+      drift(sign, numeral, word, unit, numerator.get());
     } else {
-      tolerance(sign, first, numeral);
+      tolerance(sign, numeral, word, unit);
     }
+  }
+
+  /** What a number without a unit may mean: a share first, where the errors are a value's. */
+  private List<String> likely() {
+    List<String> likely = UnitSlips.likely(expected);
+    if (!ofValue || !likely.contains("%")) {
+      return likely;
+    }
+    List<String> shareFirst = new ArrayList<>(List.of("%"));
+    likely.stream().filter(unit -> !unit.equals("%")).forEach(shareFirst::add);
+    return shareFirst;
+  }
+
+  private Expected withDrifts() {
+    List<Dimension> dimensions = new ArrayList<>(expected.dimensions());
+    expected.measured().ifPresent(unit -> dimensions.add(unit.dimension()));
+    for (Dimension dimension : List.copyOf(dimensions)) {
+      UnitTable.drift(dimension).ifPresent(dimensions::add);
+    }
+    return new Expected(dimensions, expected.measured(), true, false, true);
   }
 
   /** {@code ±-1 %}: the second sign says nothing. */
@@ -128,11 +165,12 @@ final class Errors {
     }
   }
 
-  private void tolerance(Token sign, Token first, Numeral numeral) {
-    Unit unit = unit(numeral);
+  private void tolerance(Token sign, Numeral numeral, Token word, Unit unit) {
+    accept(numeral, word, unit);
     double magnitude = numeral.times(UnitTable.power(unit));
     if (!sign.is(Kind.PLUS_MINUS)) {
-      cursor.slip(first.from(), first.from(), "a tolerance has its sign", "±");
+      cursor.slip(
+          numeral.from(), numeral.to(), "a tolerance has its sign", "±" + numeral.digits());
     }
     tolerances.add(new Tolerance(magnitude, magnitude, unit, of(unit)));
   }
@@ -179,16 +217,35 @@ final class Errors {
 
   private Unit unit(Numeral numeral) {
     Token word = cursor.peek();
-    boolean share = word.is("%") || word.is("ppm");
-    if (share && expected.dimensions().equals(List.of(Dimension.TEMPERATURE))) {
-      String why = "a share of a temperature says nothing: write kelvin, such as ±0.5 K";
-      throw cursor.refuse(
-          Problem.Kind.WRONG_UNIT, numeral.from(), word.to(), why, List.of());
+    Unit unit = amounts.anyUnit(numeral, withDrifts(), likely());
+    accept(numeral, word, unit);
+    return unit;
+  }
+
+  private void accept(Numeral numeral, Token word, Unit unit) {
+    if (UnitSlips.accepts(expected, unit)) {
+      return;
     }
-    return amounts.unit(numeral, expected);
+    int end = amounts.unitEnd(numeral.to());
+    boolean temperature = expected.dimensions().equals(List.of(Dimension.TEMPERATURE));
+    if (temperature && unit.dimension() == Dimension.RATIO) {
+      String why = "a share of a temperature says nothing: write kelvin, such as ±0.5 K";
+      throw cursor.refuse(Problem.Kind.WRONG_UNIT, numeral.from(), end, why, List.of());
+    }
+    throw UnitSlips.wrong(cursor, word.from(), end, unit, expected);
   }
 
   private Tolerance.Of of(Unit unit) {
+    Token next = cursor.peek();
+    if (SHARES.containsKey(next.text()) && unit.dimension() == Dimension.RATIO) {
+      String meant = SHARES.get(next.text());
+      throw cursor.mend(
+          Problem.Kind.NOT_ONE_VALUE,
+          next.from(),
+          next.to(),
+          "a percentage says in words what it is of",
+          meant);
+    }
     if (!cursor.isNextWord("of")) {
       return Tolerance.Of.UNSAID;
     }
@@ -225,19 +282,21 @@ final class Errors {
     return cursor.refuse(name.from(), name.to(), why, "reading", "span", "full scale");
   }
 
-  private void drift(Token sign, Numeral numeral, Unit numerator) {
-    Token word = cursor.take();
+  private void drift(Token sign, Numeral numeral, Token word, Unit unit, Unit numerator) {
+    int end = amounts.unitEnd(numeral.to());
     if (!takesDrift(numerator)) {
-      throw UnitSlips.wrong(
-          cursor, numeral, word, UnitTable.read(word.text()).orElse(numerator), expected);
+      throw UnitSlips.wrong(cursor, word.from(), end, unit, expected);
     }
     if (drift.isPresent()) {
-      throw cursor.refuse(sign.from(), word.to(), "a value has one drift, and this is a second");
+      throw cursor.refuse(sign.from(), end, "a value has one drift, and this is a second");
     }
     Optional<Range> box = box(sign, numeral);
     if (box.isEmpty() && !sign.is(Kind.PLUS_MINUS)) {
       throw cursor.refuse(
-          numeral.from(), numeral.from(), "a drift has its sign, or is a box over a range", "±");
+          numeral.from(),
+          numeral.to(),
+          "a drift has its sign, or is a box over a range",
+          "±" + numeral.digits());
     }
     drift = Optional.of(new Drift(numeral.times(UnitTable.power(numerator)), numerator, box));
   }
@@ -257,6 +316,20 @@ final class Errors {
       cursor.slip(sign.from(), numeral.from(), "a box bounds the whole excursion, unsigned", "");
     }
     return Optional.of(new Ranges(cursor).read(POINT, false));
+  }
+
+  /** {@code k=2} without its parentheses. */
+  private void bareBasis() {
+    Token k = cursor.peek();
+    Token value = cursor.peek(2);
+    if (cursor.isNextWord("k") && cursor.peek(1).is(Kind.EQUALS) && value.is(Kind.NUMBER)) {
+      throw cursor.mend(
+          Problem.Kind.NOT_ONE_VALUE,
+          k.from(),
+          value.to(),
+          "a coverage factor stands in parentheses",
+          "(k=" + value.text() + ")");
+    }
   }
 
   /** {@code (k=2)}, {@code (k=2 n=10)}. */

@@ -21,6 +21,9 @@ final class Flaws {
   void add(Flaw flaw) {
     int to = Math.min(flaw.to(), raw.length());
     int from = Math.min(flaw.from(), to);
+    if (from == to && from > 0 && flaw.spellings().isEmpty()) {
+      from--; // What is missing at the end is shown at the last character.
+    }
     boolean safe = flaw.safe() && !flaw.spellings().isEmpty();
     found.add(new Flaw(flaw.kind(), from, to, flaw.message(), flaw.spellings(), safe));
   }

@@ -36,7 +36,7 @@ final class Grammar {
     notTwoEnds(numeral);
     Unit written = amounts.unit(numeral, expected);
     Quantity quantity = numeral.in(written, expected.temperatureDifference());
-    int end = numeral.to() + between(numeral.to()).stripTrailing().length();
+    int end = amounts.unitEnd(numeral.to());
     checkPositive(quantity, numeral.from(), end);
     milli(quantity, written, numeral.from(), end);
     Optional<String> of = of(quantity.unit());
@@ -56,6 +56,9 @@ final class Grammar {
     String text = two ? first.text() + second.text() : first.text();
     Optional<Code.Reading> code =
         two || first.is(Kind.WORD) ? Code.read(text) : Optional.empty();
+    if (code.isPresent() && !fits(code.get()) && first.touches(second) && !second.is("m")) {
+      throw wrongCode(first, second, code.get());
+    }
     if (code.isEmpty() || !fits(code.get()) || two && isUnit(second, code.get())) {
       return quantity();
     }
@@ -71,6 +74,20 @@ final class Grammar {
     letter(code.get(), first.from(), end);
     noPoint();
     return Toleranced.exact(quantity).with(errors(quantity.unit()));
+  }
+
+  /** {@code 1M} at a capacitor: the letter is that of the other kind of component. */
+  private RuntimeException wrongCode(Token first, Token second, Code.Reading code) {
+    Quantity meant = code.quantity();
+    String value = Engineering.exact(meant.value(), meant.unit().symbol());
+    String text = first.text() + second.text();
+    String why = text + " is the code of " + value + ": this key takes ";
+    return cursor.refuse(
+        Problem.Kind.WRONG_UNIT,
+        first.from(),
+        second.to(),
+        why + UnitSlips.takes(expected),
+        List.of());
   }
 
   private boolean fits(Code.Reading code) {
@@ -94,15 +111,18 @@ final class Grammar {
     }
     String tolerance = code.plain() + " ±" + code.tolerance().get() + " %";
     String why = "a tolerance is written in percent, not as a letter";
-    throw cursor.refuse(from, end, why, tolerance);
+    if (code.plain().length() == end - from - 1 && cursor.text(end - 1, end).equals("F")) {
+      throw cursor.refuse(from, end, why, code.plain(), tolerance);
+    }
+    throw cursor.mend(Problem.Kind.NOT_ONE_VALUE, from, end, why, tolerance);
   }
 
   Deviation deviation() {
-    return new Errors(cursor, differences()).read(true);
+    return new Errors(cursor, differences(), false).read(true);
   }
 
   Need need() {
-    List<Tolerance> tolerances = new Errors(cursor, differences()).tolerances();
+    List<Tolerance> tolerances = new Errors(cursor, differences(), false).tolerances();
     Token word = cursor.peek();
     if (word.is(Kind.WORD) && word.text().matches("(?i)worst-?case|worst")) {
       cursor.take();
@@ -131,11 +151,7 @@ final class Grammar {
 
   private Deviation errors(Unit unit) {
     boolean point = !expected.temperatureDifference();
-    return new Errors(cursor, Errors.ofValue(unit, point)).read(false);
-  }
-
-  private String between(int from) {
-    return cursor.text(from, Math.max(from, cursor.peek().from()));
+    return new Errors(cursor, Errors.ofValue(unit, point), true).read(false);
   }
 
   private void checkPositive(Quantity quantity, int from, int to) {
@@ -164,7 +180,14 @@ final class Grammar {
 
   /** {@code 50 % of ref}. */
   private Optional<String> of(Unit unit) {
+    Token next = cursor.peek();
     if (!cursor.isNextWord("of")) {
+      boolean name = next.is(Kind.WORD) && next.text().matches("[a-z][a-z0-9-]*");
+      boolean share = unit.dimension() == Dimension.RATIO && !Leftovers.isGrammarWord(next.text());
+      if (name && share && !Leftovers.isRemark(next.text())) {
+        throw cursor.refuse(
+            next.from(), next.to(), "a percentage is of something", "of " + next.text());
+      }
       return Optional.empty();
     }
     Token of = cursor.take();
@@ -229,6 +252,10 @@ final class Grammar {
     if (key.isPresent() && last && cursor.peek().is(Kind.WORD)) {
       throw limit(key.get(), cursor.text(0, end).strip());
     }
+    Optional<String> inside = Leftovers.limit(cursor.peek(1));
+    if (cursor.isNext(Kind.OPEN) && inside.isPresent() && cursor.peek(3).is(Kind.END)) {
+      throw limit(inside.get(), cursor.text(0, end).strip());
+    }
   }
 
   private RuntimeException limit(String key, String value) {
@@ -274,12 +301,12 @@ final class Grammar {
   double count() {
     Token token = cursor.peek();
     if (!token.is(Kind.NUMBER)) {
-      throw wholeNumber(token, List.of());
+      throw wholeNumber(token.from(), cursor.lastEnd());
     }
     double value = amounts.number(expected, "").times(0);
     boolean plain = token.text().chars().allMatch(c -> c >= '0' && c <= '9');
     if (!plain && value != Math.rint(value)) {
-      throw wholeNumber(token, List.of());
+      throw wholeNumber(token.from(), token.to());
     }
     if (!plain && NumberText.of(token.text()).isStrict()) {
       String whole = Engineering.decimal(value).toPlainString();
@@ -288,13 +315,8 @@ final class Grammar {
     return value;
   }
 
-  private RuntimeException wholeNumber(Token token, List<String> spellings) {
-    return cursor.refuse(
-        Problem.Kind.NOT_ONE_VALUE,
-        token.from(),
-        token.to(),
-        "a whole number is expected here, such as 16",
-        spellings);
+  private RuntimeException wholeNumber(int from, int to) {
+    return cursor.refuse(from, to, "a whole number is expected here, such as 16");
   }
 
   /** {@code plain = signed}. */
@@ -323,14 +345,15 @@ final class Grammar {
 
   private RuntimeException noFraction(Token token) {
     String why = "a fraction is expected here, such as 1/8";
-    if (token.is(Kind.NUMBER) && NumberText.of(token.text()).isStrict()) {
+    boolean alone = token.is(Kind.NUMBER) && cursor.peek(1).is(Kind.END);
+    if (alone && NumberText.of(token.text()).isStrict()) {
       double parts = 1 / Double.parseDouble(token.text());
       if (parts == Math.rint(parts) && parts >= 1 && parts < 1e9) {
         String spelling = "1/" + Engineering.decimal(parts).toPlainString();
-        return cursor.refuse(token.from(), token.to(), why, spelling);
+        return cursor.refuse(token.from(), token.to(), "a fraction, not a decimal", spelling);
       }
     }
-    return cursor.refuse(token.from(), token.to(), why);
+    return cursor.refuse(token.from(), cursor.lastEnd(), why);
   }
 
   /** {@code ratio = signed , [ "V/V" | "dB" ]}; decibels become a ratio of amplitudes. */
@@ -343,10 +366,14 @@ final class Grammar {
     if (!word.is(Kind.WORD)) {
       throw Leftovers.refusal(cursor);
     }
-    Expected units = Expected.of(Dimension.RATIO, Dimension.DECIBEL);
-    Unit unit = amounts.unit(numeral, units);
+    boolean volts = word.text().equalsIgnoreCase("V/V");
+    if (!volts && !word.text().equalsIgnoreCase("dB")) {
+      String why = "a ratio has no unit, or V/V or dB";
+      throw cursor.refuse(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, List.of(""));
+    }
+    Unit unit = amounts.unit(numeral, Expected.of(Dimension.RATIO, Dimension.DECIBEL));
     return unit.dimension() == Dimension.DECIBEL
         ? StrictMath.pow(10, numeral.times(0) / 20)
-        : numeral.times(UnitTable.power(unit));
+        : numeral.times(0);
   }
 }

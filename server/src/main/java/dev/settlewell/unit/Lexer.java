@@ -73,7 +73,8 @@ final class Lexer {
             case '=' -> Kind.EQUALS;
             default -> Kind.MARK;
           };
-      add(kind, text.startsWith("..", at) ? at + 2 : at + 1);
+      int dots = text.startsWith("...", at) ? 3 : text.startsWith("..", at) ? 2 : 1;
+      add(kind, at + dots);
     }
   }
 

@@ -24,17 +24,18 @@ final class Ranges {
       return around(expected);
     }
     End first = first(expected);
-    to(first);
+    to(first, expected);
     Numeral second = amounts.signed(expected);
     Unit unit = secondUnit(second, first, expected);
     Quantity high = second.in(unit, expected.temperatureDifference());
     Unit firstUnit = first.unit().orElse(unit);
     Quantity low = first.numeral().in(firstUnit, expected.temperatureDifference());
-    int end = end(second);
+    int end = amounts.unitEnd(second.to());
     if (!low.unit().comparableWith(high.unit())) {
       String why = "both ends of a range have one unit, and these are " + firstUnit.written();
+      int from = Math.max(second.to(), end - unit.written().length());
       throw cursor.refuse(
-          Problem.Kind.WRONG_UNIT, second.to(), end, why + " and " + unit.written(), List.of());
+          Problem.Kind.WRONG_UNIT, from, end, why + " and " + unit.written(), List.of());
     }
     checkOrder(first, second, low.value(), high.value(), mayFall, end);
     if (expected.positive() && !(Math.min(low.value(), high.value()) > 0)) {
@@ -50,16 +51,10 @@ final class Ranges {
         !cursor.isNext(Kind.WORD) || cursor.isNextWord("to") || cursor.isNextWord("until");
     Optional<Unit> unit =
         bare ? Optional.empty() : Optional.of(amounts.unit(numeral, expected));
-    return new End(numeral, unit, end(numeral));
+    return new End(numeral, unit, amounts.unitEnd(numeral.to()));
   }
 
-  /** Where the unit behind a number ends. */
-  private int end(Numeral numeral) {
-    String between = cursor.text(numeral.to(), Math.max(numeral.to(), cursor.peek().from()));
-    return numeral.to() + between.stripTrailing().length();
-  }
-
-  private void to(End first) {
+  private void to(End first, Expected expected) {
     if (cursor.takeWord("to")) {
       return;
     }
@@ -70,12 +65,17 @@ final class Ranges {
       return;
     }
     if (between.is(Kind.END)) {
-      String why = "a range has two ends, such as 0 V to 5 V";
-      throw cursor.refuse(first.numeral().from(), first.to(), why);
+      throw cursor.refuse(first.numeral().from(), first.to(), twoEnds(expected));
     }
     noTolerance();
     throw cursor.refuse(
         between.from(), between.to(), "to is expected before the range's other end");
+  }
+
+  private static String twoEnds(Expected expected) {
+    List<String> likely = UnitSlips.likely(expected);
+    String unit = likely.isEmpty() ? "V" : likely.get(0);
+    return "a range has two ends, such as 0 " + unit + " to 5 " + unit;
   }
 
   private Unit secondUnit(Numeral second, End first, Expected expected) {
@@ -114,13 +114,14 @@ final class Ranges {
     Token sign = cursor.take();
     Numeral numeral = amounts.number(expected, "");
     Unit unit = amounts.unit(numeral, expected);
+    int end = amounts.unitEnd(numeral.to());
     if (UnitTable.isKelvin(unit) || numeral.times(0) == 0) {
-      throw outOfRange(sign.from(), end(numeral), "a range has two ends, such as 0 V to 5 V");
+      throw outOfRange(sign.from(), end, twoEnds(expected));
     }
     String amount = numeral.digits() + " " + UnitTable.canonical(unit.written());
     cursor.slip(
         sign.from(),
-        end(numeral),
+        end,
         "a range names both its ends",
         "-" + amount + " to " + amount);
     double high = numeral.times(UnitTable.power(unit));

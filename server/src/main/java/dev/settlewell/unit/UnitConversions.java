@@ -63,12 +63,18 @@ final class UnitConversions {
     String text = word.text();
     Optional<String> suffixed = suffixed(text);
     if (suffixed.isPresent()) {
-      return wrong(cursor, word.from(), word.to(), suffixWhy(text), List.of(suffixed.get()));
+      return cursor.mend(
+          Problem.Kind.WRONG_UNIT, word.from(), word.to(), suffixWhy(text), suffixed.get());
     }
-    Optional<String> converted = converted(number, text, expected);
+    String noUnit = text + " is no unit of the format";
+    if (text.equals("°F") || text.equals("degF")) {
+      return wrong(
+          cursor, number.from(), word.to(), noUnit, List.of(celsius(number, expected)));
+    }
+    Optional<String> converted = converted(number, text, expected).or(() -> volts(number, text));
     if (converted.isPresent()) {
-      String why = text + " is no unit of the format";
-      return wrong(cursor, number.from(), word.to(), why, List.of(converted.get()));
+      return cursor.mend(
+          Problem.Kind.WRONG_UNIT, number.from(), word.to(), noUnit, converted.get());
     }
     Optional<Code.Reading> code = Code.read(number.digits() + text);
     if (code.isPresent() && UnitSlips.accepts(expected, code.get().quantity().unit())) {
@@ -77,7 +83,7 @@ final class UnitConversions {
       String why = "a letter-digit code stands alone, without blanks, and only for components";
       return wrong(cursor, number.from(), word.to(), why, List.of(spelling));
     }
-    String why = text + " is no unit of the format: this key takes " + UnitSlips.takes(expected);
+    String why = noUnit + ": this key takes " + UnitSlips.takes(expected);
     return wrong(cursor, word.from(), word.to(), why, List.of());
   }
 
@@ -110,24 +116,40 @@ final class UnitConversions {
   }
 
   private static Optional<String> converted(Numeral number, String text, Expected expected) {
-    BigDecimal value = new BigDecimal(Double.toString(number.times(0)));
-    if (text.equals("°F") || text.equals("degF")) {
-      boolean difference = expected.temperatureDifference();
-      BigDecimal above = difference ? value : value.subtract(BigDecimal.valueOf(32));
-      BigDecimal celsius = above.divide(new BigDecimal("1.8"), MathContext.DECIMAL32);
-      return Optional.of(Engineering.digits(celsius.doubleValue(), 6) + (difference ? " K" : " °C"));
-    }
     Factor factor = FACTORS.get(text);
     if (factor != null && takes(expected, factor.dimension())) {
+      BigDecimal value = Engineering.decimal(number.times(0));
       double meant = value.multiply(new BigDecimal(factor.factor())).doubleValue();
       return Optional.of(Engineering.exact(meant, factor.symbol()));
     }
-    return oddPrefix(text)
-        .map(
-            unit -> {
-              double meant = number.times(POWERS.get(text.substring(0, 1)) + UnitTable.power(unit));
-              return Engineering.exact(meant, unit.symbol());
-            });
+    Optional<Unit> unit = oddPrefix(text).or(() -> measuredWord(text, expected));
+    return unit.map(
+        u -> {
+          double meant = number.times(POWERS.get(text.substring(0, 1)) + UnitTable.power(u));
+          return Engineering.exact(meant, u.symbol());
+        });
+  }
+
+  /** {@code mbar} where the channel measures in {@code bar}: a word bears no prefix. */
+  private static Optional<Unit> measuredWord(String text, Expected expected) {
+    return expected
+        .measured()
+        .filter(u -> u.dimension() == Dimension.WORD && POWERS.containsKey(text.substring(0, 1)))
+        .filter(u -> u.symbol().equals(text.substring(1)));
+  }
+
+  private static String celsius(Numeral number, Expected expected) {
+    boolean difference = expected.temperatureDifference();
+    BigDecimal value = Engineering.decimal(number.times(0));
+    BigDecimal above = difference ? value : value.subtract(BigDecimal.valueOf(32));
+    BigDecimal celsius = above.divide(new BigDecimal("1.8"), MathContext.DECIMAL32);
+    return Engineering.digits(celsius.doubleValue(), 6) + (difference ? " K" : " °C");
+  }
+
+  /** {@code 3V3} as supplies are named. */
+  private static Optional<String> volts(Numeral number, String text) {
+    boolean named = number.digits().matches("\\d{1,3}") && text.matches("V\\d{1,3}");
+    return named ? Optional.of(number.digits() + "." + text.substring(1) + " V") : Optional.empty();
   }
 
   private static boolean takes(Expected expected, Dimension dimension) {

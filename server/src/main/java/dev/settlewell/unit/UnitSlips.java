@@ -2,6 +2,7 @@ package dev.settlewell.unit;
 
 import dev.settlewell.text.Problem;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
@@ -52,6 +53,9 @@ final class UnitSlips {
           Map.entry("clocks", "cycles"),
           Map.entry("clk", "cycles"),
           Map.entry("samples/s", "S/s"),
+          Map.entry("sa/s", "S/s"),
+          Map.entry("ksa/s", "kS/s"),
+          Map.entry("msa/s", "MS/s"),
           Map.entry("[ppm]", "ppm"));
 
   /** Units of other systems that no case of a letter turns into one of ours: siemens. */
@@ -91,21 +95,33 @@ final class UnitSlips {
     if (own.isPresent()) {
       return own.get();
     }
+    Optional<Unit> measured = expected.measured().filter(u -> u.symbol().equalsIgnoreCase(text));
+    if (measured.isPresent() && measured.get().dimension() == Dimension.WORD) {
+      String why = "the measured unit is spelled the same everywhere in its channel";
+      cursor.note(
+          Problem.Kind.WRONG_UNIT,
+          word.from(),
+          word.to(),
+          why,
+          true,
+          List.of(measured.get().symbol()));
+      return measured.get();
+    }
+    Optional<String> prefixed = lonePrefix(text, expected);
+    if (prefixed.isPresent()) {
+      return take(cursor, word, "the unit is spelled in full", prefixed.get());
+    }
     Optional<String> name = Optional.ofNullable(NAMES.get(lower(text)));
     if (name.isPresent()) {
       return take(cursor, word, "the unit is spelled " + name.get(), name.get());
     }
     List<String> variants = variants(text, expected);
-    if (variants.size() == 1 && isTelling(text)) {
+    if (!variants.isEmpty() && isCertain(text, variants)) {
       return take(cursor, word, "upper and lower case count in units", variants.get(0));
     }
     if (!variants.isEmpty()) {
-      String why = "upper and lower case count in units, and it is not clear which is meant";
+      String why = "upper and lower case count in units, and " + text + " is none";
       throw cursor.refuse(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, variants);
-    }
-    Optional<String> prefixed = lonePrefix(text, expected);
-    if (prefixed.isPresent()) {
-      return take(cursor, word, "a prefix alone is no unit", prefixed.get());
     }
     throw UnitConversions.refusal(cursor, numeral, word, expected);
   }
@@ -130,7 +146,7 @@ final class UnitSlips {
     return allowed && !slip ? Optional.of(UnitTable.word(text)) : Optional.empty();
   }
 
-  /** Units that differ from the text in the case of letters only; those of the key where any. */
+  /** Units that the key takes and that differ from the text in the case of letters only. */
   private static List<String> variants(String text, Expected expected) {
     int slash = text.lastIndexOf('/');
     List<String> all = new ArrayList<>(simpleVariants(text));
@@ -146,7 +162,7 @@ final class UnitSlips {
     }
     List<String> fitting =
         all.stream().filter(v -> accepts(expected, UnitTable.read(v).orElseThrow())).toList();
-    return fitting.isEmpty() ? all : fitting;
+    return fitting;
   }
 
   private static List<String> withItself(String top) {
@@ -174,40 +190,56 @@ final class UnitSlips {
     return nearest(text, new ArrayList<>(found));
   }
 
-  /** The variants that keep the first letter as it stands come first. */
+  /** Variants that keep the first letter come first; but {@code mhz} is a megahertz as a rule. */
   private static List<String> nearest(String text, List<String> variants) {
-    variants.sort(
-        (a, b) -> Boolean.compare(!a.startsWith(first(text)), !b.startsWith(first(text))));
+    String first = text.substring(0, 1);
+    variants.sort(Comparator.comparing(v -> isMegaAsARule(v) ? !v.startsWith("M") : !v.startsWith(first)));
     return variants;
   }
 
-  private static String first(String text) {
-    return text.substring(0, 1);
+  private static boolean isMegaAsARule(String variant) {
+    return variant.endsWith("Hz") || variant.endsWith("Ω");
   }
 
-  /** False for letters that are units or prefixes of their own: {@code S}, {@code M}, {@code G}. */
-  private static boolean isTelling(String text) {
-    return !List.of("S", "M", "G", "k", "n", "p").contains(text);
+  /**
+   * True where the first variant is certainly meant: it is the only one, or keeps a small {@code m}
+   * where mega makes no sense. Letters that are units or prefixes of their own are never certain.
+   */
+  private static boolean isCertain(String text, List<String> variants) {
+    if (List.of("S", "M", "G", "k", "n", "p").contains(text)) {
+      return false;
+    }
+    return variants.size() == 1 || text.startsWith("m") && !isMegaAsARule(variants.get(0));
   }
 
   /** {@code 100 n} at a capacitor: the unit is certain where the key takes one dimension only. */
   private static Optional<String> lonePrefix(String text, Expected expected) {
-    if (expected.dimensions().size() != 1 || expected.measured().isPresent()) {
+    Optional<String> base = base(expected);
+    if (base.isEmpty()) {
       return Optional.empty();
     }
-    Dimension dimension = expected.dimensions().get(0);
-    if (dimension == Dimension.RESISTANCE && (text.equals("R") || text.equals("r"))) {
-      return Optional.of("Ω");
+    if (base.get().equals("Ω") && lower(text).equals("r")) {
+      return base;
     }
-    String prefix = text.equals("u") || text.equals("μ") ? "µ" : text.equals("K") ? "k" : text;
-    boolean tooLarge = dimension == Dimension.CAPACITANCE && "KkMG".contains(text);
-    if (!List.of("p", "n", "µ", "k", "M", "G").contains(prefix) || tooLarge) {
-      return Optional.empty();
-    }
-    return base(dimension).map(symbol -> prefix + symbol);
+    String prefix = text.equals("u") || text.equals("μ") ? "µ" : text;
+    String usual =
+        switch (base.get()) {
+          case "Ω" -> "kMG";
+          case "F" -> "pnµ";
+          default -> "pnµkMG";
+        };
+    return prefix.length() == 1 && usual.contains(prefix)
+        ? Optional.of(prefix + base.get())
+        : Optional.empty();
   }
 
-  static Optional<String> base(Dimension dimension) {
+  /** The unit without prefix of a key that takes one dimension and no measured unit. */
+  static Optional<String> base(Expected expected) {
+    boolean one = expected.dimensions().size() == 1 && expected.measured().isEmpty();
+    return one ? base(expected.dimensions().get(0)) : Optional.empty();
+  }
+
+  private static Optional<String> base(Dimension dimension) {
     return switch (dimension) {
       case RESISTANCE -> Optional.of("Ω");
       case CAPACITANCE -> Optional.of("F");
@@ -222,32 +254,20 @@ final class UnitSlips {
 
   /** Gives up a value whose unit is known but not taken here. */
   static RuntimeException wrong(
-      Cursor cursor, Numeral numeral, Token word, Unit unit, Expected expected) {
-    boolean one = expected.dimensions().size() == 1 && expected.measured().isEmpty();
-    Optional<String> base = one ? base(expected.dimensions().get(0)) : Optional.empty();
-    if (base.isPresent() && unit.written().equals("K") && !base.get().equals("F")) {
-      return cursor.refuse(
-          Problem.Kind.WRONG_UNIT,
-          word.from(),
-          word.to(),
-          "K is kelvin, and this key takes " + takes(expected),
-          List.of("k" + base.get()));
-    }
-    if (base.isPresent() && unit.written().equals("m")) {
-      return cursor.refuse(
-          Problem.Kind.WRONG_UNIT,
-          word.from(),
-          word.to(),
-          "m is metre, and this key takes " + takes(expected),
-          List.of("m" + base.get(), "M" + base.get()));
-    }
-    List<String> drift = asDrift(unit, expected);
-    if (!drift.isEmpty()) {
-      String why = "a drift is per kelvin";
-      return cursor.refuse(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, drift);
-    }
+      Cursor cursor, int from, int to, Unit unit, Expected expected) {
+    Optional<String> base = base(expected);
     String why = unit.written() + " does not fit: this key takes " + takes(expected);
-    return cursor.refuse(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, List.of());
+    List<String> spellings = asDrift(unit, expected);
+    if (!spellings.isEmpty()) {
+      why = "a drift is per kelvin";
+    } else if (base.isPresent() && unit.written().equals("K") && !base.get().equals("F")) {
+      why = "K is kelvin, and this key takes " + takes(expected);
+      return cursor.mend(Problem.Kind.WRONG_UNIT, from, to, why, "k" + base.get());
+    } else if (base.isPresent() && unit.written().equals("m")) {
+      why = "m is metre, and this key takes " + takes(expected);
+      spellings = List.of("m" + base.get(), "M" + base.get());
+    }
+    return cursor.refuse(Problem.Kind.WRONG_UNIT, from, to, why, spellings);
   }
 
   private static List<String> asDrift(Unit unit, Expected expected) {
@@ -261,7 +281,7 @@ final class UnitSlips {
   static String takes(Expected expected) {
     List<String> units = likely(expected);
     if (units.isEmpty()) {
-      return "another unit";
+      return "a unit such as m or °C";
     }
     int last = units.size() - 1;
     return last == 0
