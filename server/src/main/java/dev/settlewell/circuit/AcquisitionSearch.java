@@ -11,21 +11,24 @@ import org.apache.commons.math3.optim.univariate.UnivariateObjectiveFunction;
 import org.apache.commons.math3.util.FastMath;
 
 /**
- * Search for the last time at which the worst error crosses an allowance.
+ * Search for the last time at which the worst error crosses an allowance; used once.
  *
  * <p>The error is no monotone function of the time: it may ring, and a reservoir that has shared
  * its charge drifts again. So the times are walked from the longest down, in steps that are small
- * against the time itself and against an oscillation, to the first that does not suffice. A summit
- * between two steps that comes near the allowance is looked at closely.
+ * against the time itself, to the first that does not suffice. As long as an oscillation matters,
+ * each step is looked at over one whole oscillation; between the steps its swing changes steadily.
+ * A summit between two looks that comes near the allowance is searched.
  */
 final class AcquisitionSearch {
   /** Eight steps an octave. */
   private static final double STEP_RATIO = FastMath.pow(2, -1.0 / 8);
 
-  private static final int STEPS_PER_OSCILLATION = 16;
-  private static final int MOST_OSCILLATION_STEPS = 20_000;
+  private static final int LOOKS_PER_OSCILLATION = 16;
 
-  /** Of the allowance: between two steps a summit rises by less than the rest. */
+  /** An oscillation matters until it has fallen to this part of the allowance. */
+  private static final double NEGLIGIBLE = 0.03;
+
+  /** Of the allowance: between two looks a summit rises by less than the rest. */
   private static final double NEAR = 0.95;
 
   private final SampledLadder sampled;
@@ -33,59 +36,44 @@ final class AcquisitionSearch {
   private final double period;
   private final double[] offsets;
   private final double allowance;
+  private final double longest;
+
+  /** Length of one oscillation in s, and the time until which it matters; 0 where none is. */
+  private final double oscillation;
+
+  private final double ringsUntil;
+
+  /** The last two looks on the way down, both within the allowance. */
+  private double recentTime;
+
+  private double recentError;
+  private double laterTime;
+  private double laterError;
 
   AcquisitionSearch(
       SampledLadder sampled,
       List<Visit> visits,
       double period,
       double[] offsets,
-      double allowance) {
+      double allowance,
+      double longest) {
     this.sampled = sampled;
     this.visits = visits;
     this.period = period;
     this.offsets = offsets;
     this.allowance = allowance;
+    this.longest = Math.min(longest, shortestSpacing());
+    Propagator.Ringing ringing = sampled.acquiring().flatMap(Propagator::ringing).orElse(null);
+    oscillation = ringing == null ? 0 : 2 * Math.PI / ringing.angular();
+    ringsUntil = ringing == null ? 0 : negligibleFrom(ringing.decay());
   }
 
-  OptionalDouble upTo(double longest) {
-    double time = Math.min(longest, shortestSpacing());
-    double error = worst(time);
-    if (!(error <= allowance)) {
-      return OptionalDouble.empty();
+  private double negligibleFrom(double decay) {
+    double largest = 0;
+    for (double offset : offsets) {
+      largest = Math.max(largest, Math.abs(offset));
     }
-    double shortest = 1e-3 / sampled.acquiring().map(Propagator::fastestRate).orElse(1.0);
-    Pace pace = pace();
-    double laterTime = time;
-    double laterError = error;
-    while (time > 0) {
-      double nextTime = time > shortest ? pace.before(time) : 0;
-      double nextError = worst(nextTime);
-      if (nextError > allowance) {
-        return OptionalDouble.of(crossing(nextTime, time));
-      }
-      if (error > NEAR * allowance && error > nextError && error >= laterError) {
-        double summit = summit(nextTime, laterTime);
-        if (worst(summit) > allowance) {
-          return OptionalDouble.of(crossing(summit, laterTime));
-        }
-      }
-      laterTime = time;
-      laterError = error;
-      time = nextTime;
-      error = nextError;
-    }
-    return OptionalDouble.of(0);
-  }
-
-  /** The largest magnitude of the held error over all visits, for one common acquisition. */
-  private double worst(double acquisition) {
-    List<Visit> common =
-        visits.stream().map(visit -> new Visit(visit.start(), acquisition)).toList();
-    double worst = 0;
-    for (double error : Matrices.times(sampled.residuals(common, period), offsets)) {
-      worst = Math.max(worst, Math.abs(error));
-    }
-    return worst;
+    return FastMath.log(1 + largest / (NEGLIGIBLE * allowance)) / decay;
   }
 
   private double shortestSpacing() {
@@ -100,34 +88,107 @@ final class AcquisitionSearch {
     return Math.max(0, shortest);
   }
 
-  /**
-   * How far to step down.
-   *
-   * @param alive until when an oscillation matters, in s; 0 where there is none
-   * @param step longest step until then
-   */
-  private record Pace(double alive, double step) {
-    double before(double time) {
-      double next = time * STEP_RATIO;
-      return next < alive ? Math.max(next, Math.min(time, alive) - step) : next;
+  /** Empty where the longest time does not suffice. */
+  OptionalDouble find() {
+    if (!(worst(longest) <= allowance)) {
+      return OptionalDouble.empty();
     }
+    startAt(longest);
+    double negligible = 1e-3 / sampled.acquiring().map(Propagator::fastestRate).orElse(1.0);
+    double time = longest;
+    while (time > 0) {
+      double next = time > negligible ? time * STEP_RATIO : 0;
+      OptionalDouble crossing =
+          next < ringsUntil && time - next > 2 * oscillation
+              ? overManyOscillations(next, time)
+              : walk(time, next);
+      if (crossing.isPresent()) {
+        return crossing;
+      }
+      time = next;
+    }
+    return OptionalDouble.of(0);
   }
 
-  private Pace pace() {
-    Propagator.Ringing ringing =
-        sampled.acquiring().flatMap(Propagator::ringing).orElse(null);
-    if (ringing == null) {
-      return new Pace(0, 0);
+  private OptionalDouble overManyOscillations(double low, double high) {
+    if (!failsWithinOscillation(low)) {
+      startAt(low);
+      return OptionalDouble.empty();
     }
-    double largest = 0;
-    for (double offset : offsets) {
-      largest = Math.max(largest, Math.abs(offset));
+    double fails = low;
+    double suffices = high;
+    while (suffices - fails > oscillation) {
+      double middle = fails + (suffices - fails) / 2;
+      if (failsWithinOscillation(middle)) {
+        fails = middle;
+      } else {
+        suffices = middle;
+      }
     }
-    // Until the oscillation has fallen far below the allowance.
-    double alive = FastMath.log(1 + 1e4 * largest / allowance) / ringing.decay();
-    double step = 2 * Math.PI / ringing.angular() / STEPS_PER_OSCILLATION;
-    return new Pace(
-        alive, Math.max(step, Math.min(alive, shortestSpacing()) / MOST_OSCILLATION_STEPS));
+    double from = Math.min(longest, suffices + 3 * oscillation);
+    startAt(from);
+    return walk(from, low);
+  }
+
+  private boolean failsWithinOscillation(double from) {
+    for (int i = 0; i <= LOOKS_PER_OSCILLATION; i++) {
+      double time = Math.min(longest, from + i * oscillation / LOOKS_PER_OSCILLATION);
+      if (worst(time) > allowance) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  private void startAt(double time) {
+    recentTime = time;
+    recentError = worst(time);
+    laterTime = time;
+    laterError = Double.POSITIVE_INFINITY;
+  }
+
+  /** Looks at each time on the way down; in fine steps while an oscillation matters. */
+  private OptionalDouble walk(double from, double to) {
+    double time = from;
+    while (time > to) {
+      double step =
+          to < ringsUntil && oscillation > 0 ? oscillation / LOOKS_PER_OSCILLATION : time - to;
+      time = Math.max(to, time - step);
+      OptionalDouble crossing = look(time);
+      if (crossing.isPresent()) {
+        return crossing;
+      }
+    }
+    return OptionalDouble.empty();
+  }
+
+  private OptionalDouble look(double time) {
+    double error = worst(time);
+    if (error > allowance) {
+      return OptionalDouble.of(crossing(time, recentTime));
+    }
+    if (recentError > NEAR * allowance && recentError > error && recentError >= laterError) {
+      double summit = summit(time, laterTime);
+      if (worst(summit) > allowance) {
+        return OptionalDouble.of(crossing(summit, laterTime));
+      }
+    }
+    laterTime = recentTime;
+    laterError = recentError;
+    recentTime = time;
+    recentError = error;
+    return OptionalDouble.empty();
+  }
+
+  /** The largest magnitude of the held error over all visits, for one common acquisition. */
+  private double worst(double acquisition) {
+    List<Visit> common =
+        visits.stream().map(visit -> new Visit(visit.start(), acquisition)).toList();
+    double worst = 0;
+    for (double error : Matrices.times(sampled.residuals(common, period), offsets)) {
+      worst = Math.max(worst, Math.abs(error));
+    }
+    return worst;
   }
 
   private double crossing(double before, double after) {

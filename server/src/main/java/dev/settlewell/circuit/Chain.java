@@ -68,8 +68,8 @@ record Chain(
     private double thevenin;
 
     /**
-     * Conductance from the last node to here; infinity when here is the last node. Counts only
-     * once there is a node.
+     * Conductance from the last node to here; infinity when here is the last node. Counts only once
+     * there is a node.
      */
     private double link = Double.POSITIVE_INFINITY;
 

@@ -1,6 +1,8 @@
 package dev.settlewell.circuit;
 
-/** What drives a ladder: its incremental source impedance. The source's voltage is not part of it. */
+/**
+ * What drives a ladder: its incremental source impedance. The source's voltage is not part of it.
+ */
 public sealed interface Drive {
 
   /**
@@ -17,8 +19,8 @@ public sealed interface Drive {
 
   /**
    * An amplifier's closed-loop output impedance: R_o in parallel with L = R_o/(2 π f_cl), the usual
-   * one-pole model (the loop gain of a dominant-pole amplifier falls as 1/f and holds the output
-   * up to f_cl; common practice). No second pole and no current limit.
+   * one-pole model (the loop gain of a dominant-pole amplifier falls as 1/f and holds the output up
+   * to f_cl; common practice). No second pole and no current limit.
    *
    * @param outputOhms R_o, open-loop output resistance in Ω; 0 is an ideal voltage source
    * @param hertz f_cl = gain-bandwidth product / noise gain, more than 0; infinity is an ideal
@@ -28,7 +30,8 @@ public sealed interface Drive {
     public ClosedLoop {
       Values.requireFinite("output resistance", outputOhms);
       if (!(hertz > 0)) {
-        throw new IllegalArgumentException("closed-loop bandwidth must be more than 0, not " + hertz);
+        throw new IllegalArgumentException(
+            "closed-loop bandwidth must be more than 0, not " + hertz);
       }
     }
   }

@@ -11,10 +11,10 @@ import org.apache.commons.math3.util.FastMath;
  * modes exist whatever the values, equal time constants included. G is never formed: for a chain
  * its factors G = L D L^T follow from additions of positive numbers alone (elimination from the
  * source to the pin), and the one-sided Jacobi method finds the singular values of the bidiagonal
- * C^(-1/2) L D^(1/2), whose squares are the decay rates. So a slow mode keeps its digits beside
- * one that is many decades faster (J. Demmel, K. Veselić, Jacobi's method is more accurate than
- * QR, SIAM J. Matrix Anal. Appl. 13 (1992); for the factors J. Demmel, P. Koev, Accurate SVDs of
- * weakly diagonally dominant M-matrices, Numer. Math. 98 (2004)).
+ * C^(-1/2) L D^(1/2), whose squares are the decay rates. So a slow mode keeps its digits beside one
+ * that is many decades faster (J. Demmel, K. Veselić, Jacobi's method is more accurate than QR,
+ * SIAM J. Matrix Anal. Appl. 13 (1992); for the factors J. Demmel, P. Koev, Accurate SVDs of weakly
+ * diagonally dominant M-matrices, Numer. Math. 98 (2004)).
  */
 final class PassivePropagator implements Propagator {
   private static final int MAX_SWEEPS = 40;

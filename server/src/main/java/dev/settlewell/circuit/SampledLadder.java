@@ -63,8 +63,7 @@ final class SampledLadder {
       double[] x = column(start, j);
       for (int i = 0; i < count; i++) {
         double hold = i == j ? 1 : 0;
-        residuals[i][j] =
-            Matrices.dot(phases[i].heldOfState, x) + phases[i].heldOfHold * hold;
+        residuals[i][j] = Matrices.dot(phases[i].heldOfState, x) + phases[i].heldOfHold * hold;
         x = next(phases[i], x, hold);
       }
     }

@@ -68,6 +68,6 @@ public final class Settling {
       double allowance,
       double longest) {
     SampledLadder sampled = new SampledLadder(ladder, sampler);
-    return new AcquisitionSearch(sampled, visits, period, offsets, allowance).upTo(longest);
+    return new AcquisitionSearch(sampled, visits, period, offsets, allowance, longest).find();
   }
 }

@@ -162,7 +162,8 @@ public final class WorstCase {
     double from0 = Math.max(0, at - 0.5);
     double to1 = Math.min(1, at + 0.5);
     double start = Math.min(to1, Math.max(from0, at <= 0 ? 0.19 : at >= 1 ? 0.81 : at));
-    new BrentOptimizer(1e-15, CLOSE, (iteration, previous, current) -> iteration >= calls)
+    int leave = left - calls;
+    new BrentOptimizer(1e-15, CLOSE, (iteration, previous, current) -> left <= leave)
         .optimize(
             new UnivariateObjectiveFunction(
                 part -> evaluate(with(from, i, Math.min(high[i], low[i] + part * side)))),

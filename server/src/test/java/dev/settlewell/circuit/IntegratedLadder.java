@@ -180,6 +180,11 @@ final class IntegratedLadder {
     return next;
   }
 
+  /** Voltage of the drive's node some time after a hold capacitor at one volt was connected. */
+  double outputAfterConnection(double seconds) {
+    return motion(true, seconds).getEntry(0, hold);
+  }
+
   /** As {@link Settling#residuals}. */
   double[][] residuals(List<Visit> visits, double period) {
     int n = size();
