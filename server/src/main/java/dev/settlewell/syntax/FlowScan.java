@@ -104,8 +104,7 @@ final class FlowScan {
     } else if (Quotes.closer(c)) {
       close(c);
     } else if (c == ',') {
-      open.peek().nextItem();
-      advance(at + 1);
+      comma();
     } else if (c == ':' && separates(at)) {
       colon();
     } else {
@@ -116,6 +115,20 @@ final class FlowScan {
   private void advance(int to) {
     at = to;
     last = to;
+  }
+
+  private void comma() {
+    Open top = open.peek();
+    if (top.fresh && !top.keySeen) {
+      mending.syntax(
+          at,
+          at + 1,
+          "nothing stands before this comma: remove it, or write what is missing",
+          mending.guess("Remove the comma", mending.edit(at, at + 1, "")));
+      mending.draft.overwrite(at, ' ');
+    }
+    top.nextItem();
+    advance(at + 1);
   }
 
   private boolean separates(int offset) {

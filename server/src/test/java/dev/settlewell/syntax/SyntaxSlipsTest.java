@@ -57,6 +57,8 @@ class SyntaxSlipsTest {
         slip("a: ⟦> 5 V⟧~b: 2", "{a: !, b: 2}", "cannot begin", "a: \"> 5 V\"~b: 2"),
         slip("a: {b: ⟦@x⟧, c: 1}", "{a: {b: !, c: 1}}", "cannot begin", "a: {b: \"@x\", c: 1}"),
         slip("a: ⟦\"\\q\"⟧~b: 2", "{a: !, b: 2}", "escape", null),
+        slip("a: [1, ⟦,⟧ 2]~b: 2", "{a: [1, 2], b: 2}", "comma", "a: [1,  2]~b: 2"),
+        slip("a: {⟦,⟧ c: 2, d: , }~b: 2", "{a: {c: 2, d: ?}, b: 2}", "comma", "a: { c: 2, d: , }~b: 2"),
         // Indentation.
         slip("a:~  b: 1~    ⟦c⟧: 2~  d: 3", "{a: {b: 1, c: 2, d: 3}}", "indented by 4",
             "a:~  b: 1~  c: 2~  d: 3"),
