@@ -34,7 +34,8 @@ final class AcquisitionSearch {
   private final SampledLadder sampled;
   private final List<Visit> visits;
   private final double period;
-  private final double[] offsets;
+  private final double[] low;
+  private final double[] high;
   private final double allowance;
   private final double longest;
 
@@ -54,13 +55,15 @@ final class AcquisitionSearch {
       SampledLadder sampled,
       List<Visit> visits,
       double period,
-      double[] offsets,
+      double[] low,
+      double[] high,
       double allowance,
       double longest) {
     this.sampled = sampled;
     this.visits = visits;
     this.period = period;
-    this.offsets = offsets;
+    this.low = low;
+    this.high = high;
     this.allowance = allowance;
     this.longest = Math.min(longest, shortestSpacing());
     Propagator.Ringing ringing = sampled.acquiring().flatMap(Propagator::ringing).orElse(null);
@@ -70,8 +73,8 @@ final class AcquisitionSearch {
 
   private double negligibleFrom(double decay) {
     double largest = 0;
-    for (double offset : offsets) {
-      largest = Math.max(largest, Math.abs(offset));
+    for (int i = 0; i < low.length; i++) {
+      largest = Math.max(largest, Math.max(Math.abs(low[i]), Math.abs(high[i])));
     }
     return FastMath.log(1 + largest / (NEGLIGIBLE * allowance)) / decay;
   }
@@ -185,8 +188,9 @@ final class AcquisitionSearch {
     List<Visit> common =
         visits.stream().map(visit -> new Visit(visit.start(), acquisition)).toList();
     double worst = 0;
-    for (double error : Matrices.times(sampled.residuals(common, period), offsets)) {
-      worst = Math.max(worst, Math.abs(error));
+    double[][] residuals = sampled.residuals(common, period);
+    for (Settling.Extremes extremes : Settling.extremes(residuals, low, high)) {
+      worst = Math.max(worst, extremes.worst());
     }
     return worst;
   }

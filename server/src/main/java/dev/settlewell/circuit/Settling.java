@@ -1,5 +1,6 @@
 package dev.settlewell.circuit;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
 
@@ -49,6 +50,43 @@ public final class Settling {
   }
 
   /**
+   * The two ends of a held error, in V.
+   *
+   * @param low the most negative
+   * @param high the most positive
+   */
+  public record Extremes(double low, double high) {
+
+    /** The larger magnitude. */
+    public double worst() {
+      return Math.max(Math.abs(low), Math.abs(high));
+    }
+  }
+
+  /**
+   * The signed ends of each visit's error where every offset may lie anywhere between two bounds,
+   * independently of the others. The errors are linear in the offsets: e_i = sum r_ij o_j, so each
+   * end takes of every offset the bound that the sign of r_ij asks for.
+   *
+   * @param residuals as {@link #residuals} gives them
+   * @param low least offset at each visit in V
+   * @param high greatest offset at each visit in V
+   */
+  public static List<Extremes> extremes(double[][] residuals, double[] low, double[] high) {
+    List<Extremes> extremes = new ArrayList<>();
+    for (double[] row : residuals) {
+      double least = 0;
+      double greatest = 0;
+      for (int j = 0; j < row.length; j++) {
+        least += Math.min(row[j] * low[j], row[j] * high[j]);
+        greatest += Math.max(row[j] * low[j], row[j] * high[j]);
+      }
+      extremes.add(new Extremes(least, greatest));
+    }
+    return extremes;
+  }
+
+  /**
    * The last acquisition time at which the worst error of all visits crosses the allowance: from
    * there on every longer one, up to the longest, suffices. All acquisitions of the channel are set
    * to that common time; the period and the starts of the visits stay.
@@ -67,7 +105,26 @@ public final class Settling {
       double[] offsets,
       double allowance,
       double longest) {
+    return requiredAcquisition(
+        ladder, sampler, visits, period, offsets, offsets, allowance, longest);
+  }
+
+  /**
+   * The same where every offset may lie anywhere between two bounds, as in {@link #extremes}.
+   *
+   * @param low least offset at each visit in V
+   * @param high greatest offset at each visit in V
+   */
+  public static OptionalDouble requiredAcquisition(
+      Ladder ladder,
+      Sampler sampler,
+      List<Visit> visits,
+      double period,
+      double[] low,
+      double[] high,
+      double allowance,
+      double longest) {
     SampledLadder sampled = new SampledLadder(ladder, sampler);
-    return new AcquisitionSearch(sampled, visits, period, offsets, allowance, longest).find();
+    return new AcquisitionSearch(sampled, visits, period, low, high, allowance, longest).find();
   }
 }

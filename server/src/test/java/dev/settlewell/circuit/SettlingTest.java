@@ -3,6 +3,7 @@ package dev.settlewell.circuit;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
@@ -439,5 +440,65 @@ class SettlingTest {
                 1 / 8192.0,
                 1e-3))
         .isEmpty();
+  }
+
+  /** Bounds of the offsets: nothing between them does worse than the ends, both signs. */
+  @Test
+  void extremesBoundEveryOffsetBetweenTheBounds() {
+    for (long seed = 1; seed <= 30; seed++) {
+      RandomCircuits random = new RandomCircuits(seed);
+      RandomCircuits.Sampled circuit = random.amplified();
+      int count = circuit.visits().size();
+      double[][] residuals =
+          Settling.residuals(
+              circuit.ladder(), circuit.sampler(), circuit.visits(), circuit.period());
+      double[] low = new double[count];
+      double[] high = new double[count];
+      for (int j = 0; j < count; j++) {
+        low[j] = random.uniform(-3, 1);
+        high[j] = low[j] + random.uniform(0, 3);
+      }
+      List<Settling.Extremes> extremes = Settling.extremes(residuals, low, high);
+      double[] reachedLow = new double[count];
+      double[] reachedHigh = new double[count];
+      Arrays.fill(reachedLow, Double.POSITIVE_INFINITY);
+      Arrays.fill(reachedHigh, Double.NEGATIVE_INFINITY);
+      for (int corner = 0; corner < 1 << count; corner++) {
+        double[] offsets = new double[count];
+        for (int j = 0; j < count; j++) {
+          offsets[j] = (corner >> j & 1) == 0 ? low[j] : high[j];
+        }
+        double[] errors =
+            Settling.errors(
+                circuit.ladder(), circuit.sampler(), circuit.visits(), circuit.period(), offsets);
+        for (int i = 0; i < count; i++) {
+          reachedLow[i] = Math.min(reachedLow[i], errors[i]);
+          reachedHigh[i] = Math.max(reachedHigh[i], errors[i]);
+        }
+      }
+      for (int i = 0; i < count; i++) {
+        assertThat(extremes.get(i).low())
+            .as("seed %d", seed)
+            .isCloseTo(reachedLow[i], within(1e-12));
+        assertThat(extremes.get(i).high())
+            .as("seed %d", seed)
+            .isCloseTo(reachedHigh[i], within(1e-12));
+      }
+    }
+  }
+
+  /** With bounds of both signs the time is the longer of the two. */
+  @Test
+  void requiredAcquisitionOfBoundsIsThatOfTheWorseEnd() {
+    Ladder ladder = reservoir(1e3, 1e-9);
+    List<Visit> visit = List.of(new Visit(0, 1e-6));
+    double both =
+        Settling.requiredAcquisition(
+                ladder, SAMPLER, visit, 1e-3, new double[] {-1}, new double[] {3}, 1e-3, 1e-4)
+            .orElseThrow();
+    double worse =
+        Settling.requiredAcquisition(ladder, SAMPLER, visit, 1e-3, new double[] {3}, 1e-3, 1e-4)
+            .orElseThrow();
+    assertThat(both).isCloseTo(worse, within(1e-9 * worse));
   }
 }
