@@ -35,7 +35,7 @@ final class Names {
           Problem.Kind.SYNTAX,
           name.place(),
           "`" + text + "` is a word of the format and cannot be a name: choose another");
-      return Optional.empty();
+      return Optional.of(text);
     }
     if (NAME.matcher(text).matches()) {
       return Optional.of(text);
@@ -86,8 +86,8 @@ final class Names {
             before.place(),
             "the name `"
                 + definition.name()
-                + "` is taken by a "
-                + before.kind().word()
+                + "` is taken by "
+                + before.kind().withArticle()
                 + ": names of all sections are one namespace",
             "the " + before.kind().word() + " `" + definition.name() + "`");
       }

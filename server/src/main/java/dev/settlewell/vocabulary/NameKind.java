@@ -15,6 +15,11 @@ public enum NameKind {
     return name().toLowerCase(Locale.ROOT);
   }
 
+  /** {@code an interferer}. */
+  public String withArticle() {
+    return (this == INTERFERER ? "an " : "a ") + word();
+  }
+
   /** The key of the top level that defines such names: {@code supplies}. */
   public String section() {
     return this == SUPPLY ? "supplies" : word() + "s";
