@@ -1,0 +1,44 @@
+package dev.settlewell.channel;
+
+import dev.settlewell.sensor.Bridge;
+import dev.settlewell.sheet.Part;
+import dev.settlewell.unit.Range;
+import java.util.List;
+import java.util.Optional;
+
+/** A resistive bridge: its output is a share of its excitation, full at the end of its span. */
+record BridgeSensor(Range spans, int sensitivity, int excitation, int resistance, int accuracy)
+    implements SensorModel {
+
+  static SensorModel bind(Part sensor, Bench bench) {
+    int sensitivity = bench.need("bridge-sensitivity", sensor.quantity("sensitivity"));
+    int excitation = bench.supply(sensor.text("excitation"));
+    int resistance = bench.optional("source-resistance", sensor.quantity("resistance"), 0);
+    Range spans = Transducer.spans(sensor, bench);
+    int accuracy = bench.measuredError("sensor-accuracy", sensor.deviation("accuracy"), spans);
+    return sensitivity < 0 || excitation < 0
+        ? null
+        : new BridgeSensor(spans, sensitivity, excitation, resistance, accuracy);
+  }
+
+  @Override
+  public Port port(double x, double[] p) {
+    double fraction = (x + p[accuracy] - spans.low()) / spans.width();
+    return Port.voltage(Bridge.output(p[sensitivity], p[excitation], fraction), p[resistance]);
+  }
+
+  @Override
+  public List<Integer> resistances() {
+    return List.of(resistance);
+  }
+
+  @Override
+  public boolean isLinear() {
+    return true;
+  }
+
+  @Override
+  public Optional<Port> shorted(double[] p) {
+    return Optional.of(Port.voltage(0, 0));
+  }
+}
