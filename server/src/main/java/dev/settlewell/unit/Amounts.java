@@ -43,7 +43,8 @@ final class Amounts {
       throw Leftovers.noNumber(cursor, expected);
     }
     cursor.take();
-    Numeral numeral = new Numeral(token.from(), token.to(), sign + digits(token));
+    String digits = digits(token);
+    Numeral numeral = new Numeral(token.from(), unitEnd(token.from()), sign + digits);
     if (numeral.isTooLarge()) {
       throw outOfRange(numeral, "the number is larger than any value here can be (1e30)");
     }

@@ -1,5 +1,7 @@
 package dev.settlewell.unit;
 
+import dev.settlewell.text.Problem;
+import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.regex.Matcher;
@@ -34,6 +36,22 @@ final class Code {
   record Reading(Quantity quantity, Optional<String> tolerance, String plain) {
     Dimension dimension() {
       return quantity.unit().dimension();
+    }
+
+    /** Gives up a code where the key takes none, or not this kind: {@code 1M} at a capacitor. */
+    RuntimeException notTaken(Cursor cursor, int from, int to, Expected expected) {
+      String value = Engineering.exact(quantity.value(), quantity.unit().symbol());
+      boolean fits = UnitSlips.accepts(expected, quantity.unit());
+      String why =
+          fits
+              ? "a letter-digit code stands only for a component"
+              : cursor.text(from, to)
+                  + " is the code of "
+                  + value
+                  + ": this key takes "
+                  + UnitSlips.takes(expected);
+      List<String> spellings = fits ? List.of(value) : List.of();
+      return cursor.refuse(Problem.Kind.WRONG_UNIT, from, to, why, spellings);
     }
   }
 

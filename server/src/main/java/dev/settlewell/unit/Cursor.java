@@ -17,6 +17,9 @@ final class Cursor {
     }
   }
 
+  /** No value is longer; a whole file in one scalar is answered at once. */
+  private static final int LONGEST = 1000;
+
   private final String raw;
   private final List<Token> tokens;
   private final Flaws flaws;
@@ -30,6 +33,11 @@ final class Cursor {
 
   /** Reads a whole text by a rule. */
   static <T> Reading<T> read(String raw, Function<Cursor, T> rule) {
+    if (raw.length() > LONGEST) {
+      String why = "this text is too long to be one value";
+      return Reading.refused(
+          new Flaw(Problem.Kind.NOT_ONE_VALUE, 0, raw.length(), why, List.of(), false));
+    }
     Cursor cursor = new Cursor(raw);
     try {
       T value = rule.apply(cursor);

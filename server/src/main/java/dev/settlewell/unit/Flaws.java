@@ -25,7 +25,25 @@ final class Flaws {
       from--; // What is missing at the end is shown at the last character.
     }
     boolean safe = flaw.safe() && !flaw.spellings().isEmpty();
-    found.add(new Flaw(flaw.kind(), from, to, flaw.message(), flaw.spellings(), safe));
+    Flaw noted = new Flaw(flaw.kind(), from, to, flaw.message(), flaw.spellings(), safe);
+    found.add(safe ? withCovered(noted) : noted);
+  }
+
+  /**
+   * A spelling that is certain is made from what was meant, so it mends the slips inside it as well
+   * and takes their place: no two certain edits overlap.
+   */
+  private Flaw withCovered(Flaw flaw) {
+    Flaw whole = flaw;
+    for (Flaw inner : List.copyOf(found)) {
+      if (flaw.from() <= inner.from() && inner.to() <= flaw.to()) {
+        found.remove(inner);
+        String both = inner.message() + ", and " + whole.message();
+        boolean safe = whole.safe() && inner.safe();
+        whole = new Flaw(flaw.kind(), flaw.from(), flaw.to(), both, flaw.spellings(), safe);
+      }
+    }
+    return whole;
   }
 
   /** True where the meaning is certain in spite of all that was found. */

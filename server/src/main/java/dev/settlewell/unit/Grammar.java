@@ -57,7 +57,7 @@ final class Grammar {
     Optional<Code.Reading> code =
         two || first.is(Kind.WORD) ? Code.read(text) : Optional.empty();
     if (code.isPresent() && !fits(code.get()) && first.touches(second) && !second.is("m")) {
-      throw wrongCode(first, second, code.get());
+      throw code.get().notTaken(cursor, first.from(), second.to(), expected);
     }
     if (code.isEmpty() || !fits(code.get()) || two && isUnit(second, code.get())) {
       return quantity();
@@ -67,27 +67,14 @@ final class Grammar {
     }
     int end = two ? second.to() : first.to();
     if (two && !first.touches(second)) {
-      apart(first, second, code.get());
+      String why = "a letter-digit code has no blank";
+      cursor.slip(first.from(), second.to(), why, first.text() + second.text());
     }
     Quantity quantity = code.get().quantity();
     checkPositive(quantity, first.from(), end);
     letter(code.get(), first.from(), end);
     noPoint();
     return Toleranced.exact(quantity).with(errors(quantity.unit()));
-  }
-
-  /** {@code 1M} at a capacitor: the letter is that of the other kind of component. */
-  private RuntimeException wrongCode(Token first, Token second, Code.Reading code) {
-    Quantity meant = code.quantity();
-    String value = Engineering.exact(meant.value(), meant.unit().symbol());
-    String text = first.text() + second.text();
-    String why = text + " is the code of " + value + ": this key takes ";
-    return cursor.refuse(
-        Problem.Kind.WRONG_UNIT,
-        first.from(),
-        second.to(),
-        why + UnitSlips.takes(expected),
-        List.of());
   }
 
   private boolean fits(Code.Reading code) {
@@ -98,10 +85,6 @@ final class Grammar {
   private boolean isUnit(Token word, Code.Reading code) {
     return UnitTable.read(word.text()).filter(u -> u.dimension() == code.dimension()).isPresent()
         || word.text().length() == 1 && !cursor.peek().touches(word);
-  }
-
-  private void apart(Token number, Token rest, Code.Reading code) {
-    cursor.slip(number.to(), rest.from(), "a letter-digit code has no blank", "");
   }
 
   /** {@code 4K7J}: the letter of a tolerance is not read, and said in percent instead. */
@@ -271,7 +254,8 @@ final class Grammar {
   /** {@code 5..7 pF}, {@code 5 pF to 7 pF} where one value is wanted. */
   private void notTwoEnds(Numeral first) {
     boolean to = cursor.isNextWord("to") || cursor.isNextWord("until");
-    if (!to && !Leftovers.isDash(cursor)) {
+    boolean two = to ? !cursor.peek(1).is(Kind.END) : Leftovers.isDash(cursor);
+    if (!two) {
       return;
     }
     int end = cursor.lastEnd();
@@ -305,8 +289,8 @@ final class Grammar {
     }
     double value = amounts.number(expected, "").times(0);
     boolean plain = token.text().chars().allMatch(c -> c >= '0' && c <= '9');
-    if (!plain && value != Math.rint(value)) {
-      throw wholeNumber(token.from(), token.to());
+    if (value != Math.rint(value)) {
+      throw wholeNumber(token.from(), amounts.unitEnd(token.to()));
     }
     if (!plain && NumberText.of(token.text()).isStrict()) {
       String whole = Engineering.decimal(value).toPlainString();

@@ -77,11 +77,8 @@ final class UnitConversions {
           Problem.Kind.WRONG_UNIT, number.from(), word.to(), noUnit, converted.get());
     }
     Optional<Code.Reading> code = Code.read(number.digits() + text);
-    if (code.isPresent() && UnitSlips.accepts(expected, code.get().quantity().unit())) {
-      Quantity meant = code.get().quantity();
-      String spelling = Engineering.exact(meant.value(), meant.unit().symbol());
-      String why = "a letter-digit code stands alone, without blanks, and only for components";
-      return wrong(cursor, number.from(), word.to(), why, List.of(spelling));
+    if (code.isPresent() && number.to() == word.from()) {
+      throw code.get().notTaken(cursor, number.from(), word.to(), expected);
     }
     String why = noUnit + ": this key takes " + UnitSlips.takes(expected);
     return wrong(cursor, word.from(), word.to(), why, List.of());
