@@ -1,13 +1,12 @@
 package dev.settlewell.finding;
 
-import dev.settlewell.channel.Analysis;
 import dev.settlewell.channel.Analyzer;
-import dev.settlewell.sheet.Linked;
-import dev.settlewell.sheet.Sheet;
-import dev.settlewell.sheet.Sheets;
-import dev.settlewell.syntax.Syntax;
 import dev.settlewell.text.SourceText;
 import dev.settlewell.vocabulary.Vocabulary;
+import dev.settlewell.workspace.Memo;
+import dev.settlewell.workspace.SheetReader;
+import dev.settlewell.workspace.Workspace;
+import java.nio.file.Path;
 import java.time.LocalDate;
 import java.util.List;
 import java.util.Map;
@@ -16,6 +15,7 @@ import java.util.Map;
 record Judged(SourceText text, List<Finding> findings) {
   static final LocalDate TODAY = LocalDate.of(2026, 12, 1);
 
+  private static final String PATH = "/plant/page.channels.yaml";
   private static final Vocabulary VOCABULARY = Vocabulary.load();
 
   static Judged sheet(String content) {
@@ -23,27 +23,37 @@ record Judged(SourceText text, List<Finding> findings) {
   }
 
   static Judged on(LocalDate date, String content) {
-    SourceText text = SourceText.of("page.channels.yaml", content);
-    Sheet sheet = Sheets.bind(Syntax.parse(text), VOCABULARY);
-    return new Judged(text, Findings.of(analyze(link(sheet, date))));
+    return on(date, Map.of(PATH, content));
   }
 
-  private static Linked link(Sheet sheet, LocalDate date) {
-    return new Linked(
-        sheet,
-        List.of(),
-        sheet.supplies(),
-        sheet.converters(),
-        sheet.interferers(),
-        List.of(),
-        date);
+  /** The first sheet, with the others beside it to be used. */
+  static Judged with(String content, String otherName, String other) {
+    return on(TODAY, Map.of(PATH, content, "/plant/" + otherName, other));
   }
 
-  private static Analysis analyze(Linked linked) {
-    try {
-      return Analyzer.analyze(linked);
-    } catch (UnsupportedOperationException e) {
-      return new Analysis(linked, Map.of(), Map.of(), Map.of());
+  private static Judged on(LocalDate date, Map<String, String> files) {
+    Workspace workspace =
+        Workspace.read(List.of(PATH), new Files(files), date, new Memo(VOCABULARY));
+    return new Judged(
+        SourceText.of(PATH, files.get(PATH)),
+        Findings.of(Analyzer.analyze(workspace.find(PATH).orElseThrow())));
+  }
+
+  private record Files(Map<String, String> texts) implements SheetReader {
+    @Override
+    public Content read(String path) {
+      String text = texts.get(real(path));
+      return text == null ? Content.none("there is no such file") : Content.of(text);
+    }
+
+    @Override
+    public boolean exists(String path) {
+      return texts.keySet().stream().anyMatch(file -> file.startsWith(real(path)));
+    }
+
+    @Override
+    public String real(String path) {
+      return Path.of("/").resolve(path).normalize().toString();
     }
   }
 
@@ -53,11 +63,11 @@ record Judged(SourceText text, List<Finding> findings) {
   }
 
   private String shown(Finding finding) {
-    return "%s %s ‹%s› %s"
+    return "\n%s %s ‹%s› %s"
         .formatted(
             finding.severity().label(),
             finding.name(),
-            text.slice(finding.place().span()),
+            finding.place().sheet().equals(PATH) ? text.slice(finding.place().span()) : "elsewhere",
             finding.message());
   }
 

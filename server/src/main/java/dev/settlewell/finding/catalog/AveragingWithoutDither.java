@@ -23,9 +23,10 @@ final class AveragingWithoutDither extends ChannelCheck {
 
   @Override
   void check(ChannelView channel, Consumer<Finding> report) {
+    boolean noiseIsKnown = channel.converter().map(part -> part.has("noise")).orElse(false);
     double bias = channel.magnitude("averaging-bias") / Math.sqrt(2);
     double rest = channel.number("averaging-rest");
-    if (!(bias > rest)) {
+    if (!noiseIsKnown || !(bias > rest)) {
       return;
     }
     report.accept(

@@ -28,7 +28,7 @@ final class BandAboveHalfRate extends ChannelCheck {
   @Override
   void check(ChannelView channel, Consumer<Finding> report) {
     double band = channel.number("band");
-    double rate = leastRate(channel);
+    double rate = channel.number("result-rate-least");
     if (!(rate <= 2 * band)) {
       return;
     }
@@ -52,14 +52,6 @@ final class BandAboveHalfRate extends ChannelCheck {
             .related(channel.place("average"), "results a mean")
             .candidate(faster(channel, 1.05 * factor * scanRate))
             .build());
-  }
-
-  /** The result rate where the scan's tolerance makes it least. */
-  private static double leastRate(ChannelView channel) {
-    double rate = channel.number("result-rate");
-    double longest = channel.scanNumber("scan-period-longest");
-    double nominal = 1 / channel.scanNumber("scan-rate");
-    return longest > nominal ? rate * nominal / longest : rate;
   }
 
   private static Optional<Fix> faster(ChannelView channel, double rate) {

@@ -9,9 +9,7 @@ import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Slot;
 import dev.settlewell.text.Place;
 import dev.settlewell.text.SourceText;
-import dev.settlewell.unit.Need;
 import dev.settlewell.unit.Range;
-import dev.settlewell.unit.Tolerance;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -101,36 +99,10 @@ record ChannelView(Analysis analysis, ChannelFigures figures, Part part) {
     return measures().map(range -> range.unit().symbol()).orElse("");
   }
 
-  /**
-   * What the sheet asks for, in the measured unit: at the worst point where there is a budget, at
-   * its tightest without one. Empty where it asks for nothing.
-   */
+  /** What the sheet asks for, in the measured unit; empty where it asks for nothing. */
   OptionalDouble needs() {
-    if (budget().isPresent() && budget().get().needs().isPresent()) {
-      return budget().get().needs();
-    }
-    Optional<Need> need = part.need("needs").stated();
-    if (need.isEmpty() || measures().isEmpty()) {
-      return OptionalDouble.empty();
-    }
-    double sum = 0;
-    for (Tolerance tolerance : need.get().tolerances()) {
-      sum += Math.min(tolerance.minus(), tolerance.plus()) * whole(tolerance, measures().get());
-    }
-    return sum > 0 ? OptionalDouble.of(sum) : OptionalDouble.empty();
-  }
-
-  private static double whole(Tolerance tolerance, Range measures) {
-    if (!tolerance.isShare() || measures.unit().symbol().equals(tolerance.unit().symbol())) {
-      return 1;
-    }
-    if (tolerance.of() == Tolerance.Of.READING) {
-      boolean crossesZero = measures.contains(0);
-      double low = Math.abs(measures.low());
-      double high = Math.abs(measures.high());
-      return crossesZero ? 0 : Math.min(low, high);
-    }
-    return measures.width();
+    OptionalDouble atWorst = budget().map(Budget::needs).orElse(OptionalDouble.empty());
+    return atWorst.isPresent() ? atWorst : value("needs");
   }
 
   /**

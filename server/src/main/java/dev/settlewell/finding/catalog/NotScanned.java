@@ -42,6 +42,9 @@ final class NotScanned implements Check {
     }
     for (ChannelFigures channel : analysis.unscanned().values()) {
       String name = channel.channel().name();
+      if (standsInAnOrder(sheet, name)) {
+        continue; // Its scan cannot be computed, for a reason that has a finding of its own.
+      }
       String message =
           sheet.scans().isEmpty()
               ? name + " is never sampled: the sheet has no scan; its settling, timing and"
@@ -65,6 +68,14 @@ final class NotScanned implements Check {
     return sheet.scans().values().stream()
         .map(Named::value)
         .allMatch(slot -> slot.stated().map(scan -> isClear(scan, sheet)).orElse(false));
+  }
+
+  private static boolean standsInAnOrder(Sheet sheet, String channel) {
+    return sheet.scans().values().stream()
+        .flatMap(scan -> scan.value().stated().stream())
+        .flatMap(scan -> scan.list("order", String.class).stated().stream())
+        .flatMap(List::stream)
+        .anyMatch(item -> item.stated().filter(channel::equals).isPresent());
   }
 
   private static boolean isClear(Part scan, Sheet sheet) {

@@ -2,6 +2,7 @@ package dev.settlewell.finding.catalog;
 
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
+import dev.settlewell.channel.Figure;
 import dev.settlewell.text.Fix;
 import dev.settlewell.unit.PreferredValues;
 import dev.settlewell.unit.PreferredValues.Series;
@@ -34,27 +35,29 @@ final class PinOverstressed extends ChannelCheck {
             .flatMap(part -> part.quantity("clamp-current").stated())
             .map(quantity -> quantity.value())
             .orElse(Double.NaN);
-    double high = channel.magnitude("overload-current-high");
-    double low = channel.magnitude("overload-current-low");
-    double worst = Math.max(Double.isNaN(high) ? 0 : high, Double.isNaN(low) ? 0 : low);
+    double high = current(channel, "overload-current-high");
+    double low = current(channel, "overload-current-low");
+    double worst = Math.max(high, low);
     if (!(worst > allowed)) {
       return;
     }
-    double resistance = channel.number("source-resistance");
-    double more = resistance * (worst / allowed - 1);
-    String part = Words.part(PreferredValues.nextHigher(Series.E24, Math.max(more, 1)), "Ω");
+    double more = channel.number("source-resistance") * (worst / allowed - 1);
     String mend =
-        Double.isNaN(resistance)
-            ? "; put a resistor in series with the pin"
-            : "; %s more in series with the pin (%s of E24) would limit it"
-                .formatted(Words.of(more, "Ω"), part);
+        Double.isFinite(more) && more > 0
+            ? "; %s more in series with the pin (%s of E24) would limit it"
+                .formatted(
+                    Words.of(more, "Ω"),
+                    Words.part(PreferredValues.nextHigher(Series.E24, more), "Ω"))
+            : "; put a resistor in series with the pin";
     report.accept(
         FindingBuilder.of(this, channel, "overload")
             .message(
                 "an overload to %s drives %s into the clamp of the pin, which may carry %s%s"
                     .formatted(
                         overload(channel, high >= low),
-                        Words.of(worst, "A"),
+                        Double.isInfinite(worst)
+                            ? "a current that nothing limits"
+                            : Words.of(worst, "A"),
                         Words.of(allowed, "A"),
                         mend))
             .need(Words.of(worst, "A"))
@@ -65,6 +68,16 @@ final class PinOverstressed extends ChannelCheck {
                 "what the clamp may carry")
             .candidate(larger(channel, more))
             .build());
+  }
+
+  /** Infinite where nothing limits it, 0 where nothing is known. */
+  private static double current(ChannelView channel, String name) {
+    boolean unlimited =
+        channel
+            .figure(name)
+            .map(figure -> figure.state() instanceof Figure.State.Unlimited)
+            .orElse(false);
+    return unlimited ? Double.POSITIVE_INFINITY : Math.abs(channel.value(name).orElse(0));
   }
 
   private static String overload(ChannelView channel, boolean above) {

@@ -5,6 +5,7 @@ import dev.settlewell.finding.Check;
 import dev.settlewell.finding.Severity;
 import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Slot;
+import dev.settlewell.text.Place;
 import dev.settlewell.unit.PreferredValues;
 import dev.settlewell.unit.PreferredValues.Series;
 import java.util.List;
@@ -54,11 +55,12 @@ final class SettlingJudgement {
     if (channel.value("required-acquisition").isEmpty()) {
       return false;
     }
-    if (offersCycles()) {
-      return channel.value("next-acquisition-cycles").isPresent();
-    }
     double available = channel.value("acquisition-available").orElse(Double.POSITIVE_INFINITY);
-    return channel.number("required-acquisition") <= available;
+    if (!offersCycles()) {
+      return channel.number("required-acquisition") <= available;
+    }
+    double cycle = channel.number("acquisition") / channel.number("acquisition-cycles");
+    return channel.number("next-acquisition-cycles") * cycle <= available;
   }
 
   boolean offersCycles() {
@@ -75,7 +77,7 @@ final class SettlingJudgement {
   }
 
   /** A finding with what all three have in common. */
-  FindingBuilder begin(Check check, dev.settlewell.text.Place place) {
+  FindingBuilder begin(Check check, Place place) {
     FindingBuilder finding =
         FindingBuilder.of(check, place, channel.name())
             .severity(severity())

@@ -38,10 +38,13 @@ final class SourceResistanceTooHigh extends ChannelCheck {
     double present = channel.number("source-resistance");
     double largest = present * allowed / error;
     String would =
-        Words.of(largest, "Ω")
-            + " ("
-            + Words.part(PreferredValues.nextLower(Series.E24, largest), "Ω")
-            + " of E24)";
+        largest > 0
+            ? Words.of(largest, "Ω")
+                + " ("
+                + Words.part(PreferredValues.nextLower(Series.E24, largest), "Ω")
+                + " of E24)"
+            : Words.share(allowed / error) + " of it";
+    String have = largest > 0 ? Words.of(present, "Ω") : "the source resistance";
     String leaves =
         Words.of(error, channel.unit())
             + " ("
@@ -52,9 +55,9 @@ final class SourceResistanceTooHigh extends ChannelCheck {
             .message(
                 "the pin's leakage through %s makes an error of %s; at most %s keeps it within %s"
                     .formatted(
-                        Words.of(present, "Ω"), leaves, would, Words.of(allowed, channel.unit())))
+                        have, leaves, would, Words.of(allowed, channel.unit())))
             .need("at most " + would)
-            .have(Words.of(present, "Ω"))
+            .have(have)
             .fact("error", leaves)
             .related(
                 channel.converter().map(part -> part.slot("pin-leakage").place()),

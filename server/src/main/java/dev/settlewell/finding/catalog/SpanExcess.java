@@ -12,6 +12,8 @@ import java.util.function.Consumer;
 
 /** How far a channel's voltage at the pin leaves the span of its converter, at one of its ends. */
 final class SpanExcess {
+  private static final double SAME = 1e-9;
+
   private final ChannelView channel;
   private final boolean above;
 
@@ -20,25 +22,27 @@ final class SpanExcess {
     this.above = above;
   }
 
-  /** An error where the nominal voltage leaves the nominal span, a warning where the worst does. */
+  /**
+   * An error where the nominal voltage leaves the nominal span, a warning where the worst does; pin
+   * and reference are moved together there, for what feeds both cancels.
+   */
   void report(Check check, Consumer<Finding> report) {
     String end = above ? "high" : "low";
     double nominal = channel.number("pin-nominal-" + end);
     double span = channel.number("span-" + end);
-    double worst = channel.number("pin-" + end);
-    double least = channel.number("span-least-" + end);
-    if (beyond(nominal, span)) {
+    double share = channel.number("pin-share-worst-" + end);
+    double full = channel.number("full-scale");
+    if (beyond((nominal - span) / full)) {
       report.accept(finding(check, Severity.ERROR, nominal, span, ""));
-    } else if (beyond(worst, least)) {
-      report.accept(finding(check, Severity.WARNING, worst, least, " with all tolerances"));
+    } else if (beyond(above ? share - 1 : share)) {
+      double worst = span + (above ? share - 1 : share) * full;
+      report.accept(finding(check, Severity.WARNING, worst, span, " with all tolerances"));
     }
   }
 
-  private boolean beyond(double voltage, double limit) {
-    // A range that ends exactly where the span does is meant to; its last bit is no excess.
-    double slack = 1e-9 * Math.abs(channel.number("full-scale"));
-    double tolerated = Double.isNaN(slack) ? 0 : slack;
-    return above ? voltage > limit + tolerated : voltage < limit - tolerated;
+  /** A range that ends exactly where the span does is meant to; its last bit is no excess. */
+  private boolean beyond(double shareOutside) {
+    return above ? shareOutside > SAME : shareOutside < -SAME;
   }
 
   private Finding finding(

@@ -6,17 +6,24 @@ import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
 import dev.settlewell.sheet.Named;
 import dev.settlewell.sheet.Part;
+import dev.settlewell.sheet.Slot;
 import dev.settlewell.text.Place;
+import dev.settlewell.unit.Toleranced;
 import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
+import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.Consumer;
+import java.util.stream.Stream;
 
 /** A worst case that rests on a figure of which only the typical value is known. */
 final class TypicalOnly implements Check {
+  private static final List<String> OF_SETTLING =
+      List.of("hold-capacitor", "switch-resistance", "pin-capacitance");
+
   @Override
   public String name() {
     return "typical-only";
@@ -36,11 +43,26 @@ final class TypicalOnly implements Check {
   public void run(Analysis analysis, Consumer<Finding> report) {
     Map<Place, Set<String>> restingOn = new LinkedHashMap<>();
     for (ChannelView channel : ChannelView.all(analysis)) {
-      for (Place place : channel.figures().typicalOnly()) {
-        restingOn.computeIfAbsent(place, p -> new LinkedHashSet<>()).add(channel.name());
-      }
+      places(channel)
+          .forEach(
+              place ->
+                  restingOn
+                      .computeIfAbsent(place, p -> new LinkedHashSet<>())
+                      .add(channel.name()));
     }
     restingOn.forEach((place, channels) -> report.accept(finding(analysis, place, channels)));
+  }
+
+  /** What the budget rests on, and what settling does where it was computed. */
+  private static Stream<Place> places(ChannelView channel) {
+    Stream<Place> ofSettling =
+        channel.value("settling-error").isEmpty()
+            ? Stream.empty()
+            : channel.converter().stream()
+                .flatMap(part -> OF_SETTLING.stream().map(part::quantity))
+                .filter(slot -> slot.stated().map(Toleranced::typicalOnly).orElse(false))
+                .map(Slot::place);
+    return Stream.concat(channel.figures().typicalOnly().stream(), ofSettling).distinct();
   }
 
   private Finding finding(Analysis analysis, Place place, Set<String> channels) {

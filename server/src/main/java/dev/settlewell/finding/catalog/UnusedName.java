@@ -40,7 +40,10 @@ final class UnusedName implements Check {
   @Override
   public void run(Analysis analysis, Consumer<Finding> report) {
     Sheet sheet = analysis.linked().sheet();
-    boolean broken = !sheet.problems().isEmpty() || !sheet.tree().problems().isEmpty();
+    boolean broken =
+        !sheet.problems().isEmpty()
+            || !sheet.tree().problems().isEmpty()
+            || !analysis.linked().problems().isEmpty();
     if (sheet.channels().isEmpty() || broken) {
       return;
     }
