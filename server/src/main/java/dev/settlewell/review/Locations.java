@@ -1,0 +1,59 @@
+package dev.settlewell.review;
+
+import dev.settlewell.sheet.Sheet;
+import dev.settlewell.text.Place;
+import dev.settlewell.text.PositionEncoding;
+import dev.settlewell.text.SourceText;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.function.UnaryOperator;
+
+/** Where places of the sheets of one report stand, in paths, lines and columns. */
+final class Locations {
+  private final Map<String, SourceText> texts = new HashMap<>();
+  private final UnaryOperator<String> shown;
+
+  Locations(List<Reviewed> sheets, UnaryOperator<String> shown) {
+    this.shown = shown;
+    for (Reviewed sheet : sheets) {
+      sheet.analysis().linked().used().stream().map(Sheet::text).forEach(this::add);
+      add(sheet.text());
+    }
+  }
+
+  private void add(SourceText text) {
+    texts.put(text.name(), text);
+  }
+
+  String path(Place place) {
+    return shown.apply(place.sheet());
+  }
+
+  Optional<SourceText> text(Place place) {
+    return Optional.ofNullable(texts.get(place.sheet()));
+  }
+
+  /** Empty where the place stands in a file that is no sheet of this report. */
+  Optional<Location> of(Place place, PositionEncoding columns) {
+    return text(place)
+        .filter(text -> place.end() <= text.length())
+        .map(text -> Location.of(text, place.span(), columns));
+  }
+
+  /** What stands there; empty where it is not known. */
+  String written(Place place) {
+    return text(place)
+        .filter(text -> place.end() <= text.length())
+        .map(text -> text.slice(place.span()))
+        .orElse("");
+  }
+
+  /** {@code path:line:column}, columns in characters; the path alone where no more is known. */
+  String pointer(Place place) {
+    return of(place, PositionEncoding.UTF_32)
+        .map(at -> path(place) + ":" + at.line() + ":" + at.column())
+        .orElse(path(place));
+  }
+}
