@@ -39,7 +39,7 @@ final class Envelope {
   /** The path only where it is another one than that of the sheet that is told of. */
   JsonObject place(Place place, String home) {
     JsonObject object = new JsonObject();
-    String path = locations.path(place);
+    String path = place.sheet();
     if (!path.equals(home)) {
       object.addProperty("path", path);
     }

@@ -220,7 +220,7 @@ public final class FindingsSarif {
   }
 
   private JsonObject physical(Place place) {
-    JsonObject physical = object("artifactLocation", artifactLocation(locations.path(place)));
+    JsonObject physical = object("artifactLocation", artifactLocation(place.sheet()));
     locations
         .of(place, PositionEncoding.UTF_16)
         .ifPresent(at -> physical.add("region", region(at)));
@@ -264,7 +264,7 @@ public final class FindingsSarif {
     Map<String, JsonArray> bySheet = new LinkedHashMap<>();
     for (Edit edit : fix.edits()) {
       bySheet
-          .computeIfAbsent(locations.path(edit.place()), path -> new JsonArray())
+          .computeIfAbsent(edit.place().sheet(), path -> new JsonArray())
           .add(replacement(edit));
     }
     JsonArray changes = new JsonArray();

@@ -8,15 +8,12 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.UnaryOperator;
 
 /** Where places of the sheets of one report stand, in paths, lines and columns. */
 final class Locations {
   private final Map<String, SourceText> texts = new HashMap<>();
-  private final UnaryOperator<String> shown;
 
-  Locations(List<Reviewed> sheets, UnaryOperator<String> shown) {
-    this.shown = shown;
+  Locations(List<Reviewed> sheets) {
     for (Reviewed sheet : sheets) {
       sheet.analysis().linked().used().stream().map(Sheet::text).forEach(this::add);
       add(sheet.text());
@@ -25,10 +22,6 @@ final class Locations {
 
   private void add(SourceText text) {
     texts.put(text.name(), text);
-  }
-
-  String path(Place place) {
-    return shown.apply(place.sheet());
   }
 
   Optional<SourceText> text(Place place) {
@@ -53,7 +46,7 @@ final class Locations {
   /** {@code path:line:column}, columns in characters; the path alone where no more is known. */
   String pointer(Place place) {
     return of(place, PositionEncoding.UTF_32)
-        .map(at -> path(place) + ":" + at.line() + ":" + at.column())
-        .orElse(path(place));
+        .map(at -> place.sheet() + ":" + at.line() + ":" + at.column())
+        .orElse(place.sheet());
   }
 }

@@ -3,7 +3,6 @@ package dev.settlewell.review;
 import java.time.LocalDate;
 import java.util.Comparator;
 import java.util.List;
-import java.util.function.UnaryOperator;
 
 /**
  * Everything one report tells.
@@ -12,14 +11,9 @@ import java.util.function.UnaryOperator;
  * @param failures files that could not be read, each with the reason
  * @param version of this program
  * @param date the day the acceptances were judged on
- * @param shown how the name of a sheet's text is shown as a path
  */
 public record Review(
-    List<Reviewed> sheets,
-    List<Failure> failures,
-    String version,
-    LocalDate date,
-    UnaryOperator<String> shown) {
+    List<Reviewed> sheets, List<Failure> failures, String version, LocalDate date) {
 
   /** A file that could not be read. */
   public record Failure(String path, String message) {}
@@ -34,6 +28,6 @@ public record Review(
   }
 
   Locations locations() {
-    return new Locations(sheets, shown);
+    return new Locations(sheets);
   }
 }

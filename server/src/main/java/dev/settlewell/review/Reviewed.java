@@ -11,20 +11,24 @@ import java.util.Map;
 /**
  * One sheet, read, computed and judged.
  *
- * @param path as reports show it: relative, with {@code /}
  * @param findings in the order of the text, accepted ones among them
  * @param remedies by finding: the ways to mend it that were shown to help; a finding that is not
  *     here has none, or nobody asked
  */
 public record Reviewed(
-    String path, Analysis analysis, List<Finding> findings, Map<Finding, List<Fix>> remedies) {
+    Analysis analysis, List<Finding> findings, Map<Finding, List<Fix>> remedies) {
   public Reviewed {
     findings = List.copyOf(findings);
     remedies = Map.copyOf(remedies);
   }
 
-  public Reviewed(String path, Analysis analysis, List<Finding> findings) {
-    this(path, analysis, findings, Map.of());
+  public Reviewed(Analysis analysis, List<Finding> findings) {
+    this(analysis, findings, Map.of());
+  }
+
+  /** As reports show it: relative to where the tool was started, with {@code /}. */
+  public String path() {
+    return sheet().path();
   }
 
   public Sheet sheet() {
