@@ -2,6 +2,7 @@ package dev.settlewell;
 
 import dev.settlewell.command.Console;
 import dev.settlewell.command.Tool;
+import java.io.BufferedInputStream;
 import java.io.BufferedOutputStream;
 import java.io.FileDescriptor;
 import java.io.FileInputStream;
@@ -29,7 +30,7 @@ public final class Main {
     System.setOut(new PrintStream(System.err, true, StandardCharsets.UTF_8));
     Console console =
         new Console(
-            new FileInputStream(FileDescriptor.in),
+            new BufferedInputStream(new FileInputStream(FileDescriptor.in)),
             out,
             new FileOutputStream(FileDescriptor.err),
             Path.of("").toAbsolutePath(),

@@ -4,6 +4,7 @@ import dev.settlewell.text.Place;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 
 /**
  * One computed figure with its derivation. Names are listed in {@code schema/figures.md} and stay
@@ -20,6 +21,16 @@ public record Figure(
     OptionalDouble at,
     String formula,
     List<Operand> operands) {
+
+  private static final Set<String> SHARES =
+      Set.of(
+          "utilisation",
+          "scan-utilisation",
+          "droop",
+          "range-used",
+          "pin-share-worst-high",
+          "pin-share-worst-low",
+          "spacing-unevenness");
 
   /** What became of a figure. */
   public sealed interface State {
@@ -75,6 +86,11 @@ public record Figure(
 
   public Figure at(double x) {
     return new Figure(name, state, unit, OptionalDouble.of(x), formula, operands);
+  }
+
+  /** Whether the unit 1 means a share, told in percent, and not a count, a code or a ratio. */
+  public boolean isShare() {
+    return unit.equals("1") && SHARES.contains(name);
   }
 
   public OptionalDouble value() {

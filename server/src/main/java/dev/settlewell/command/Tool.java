@@ -1,6 +1,5 @@
 package dev.settlewell.command;
 
-import java.io.PrintWriter;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Help;
@@ -9,6 +8,7 @@ import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
+import picocli.CommandLine.UnmatchedArgumentException;
 
 /** The command line as a whole: what a person types after {@code settlewell}. */
 @Command(
@@ -73,12 +73,18 @@ public final class Tool implements Runnable {
   }
 
   private static int wrongUsage(ParameterException wrong, Output output) {
-    CommandLine command = wrong.getCommandLine();
-    output.note(wrong.getMessage());
-    PrintWriter err = command.getErr();
-    if (!CommandLine.UnmatchedArgumentException.printSuggestions(wrong, err)) {
-      output.note("try `" + command.getCommandSpec().qualifiedName() + " --help`");
+    String help = "try `" + wrong.getCommandLine().getCommandSpec().qualifiedName() + " --help`";
+    String message = wrong.getMessage();
+    if (wrong instanceof UnmatchedArgumentException unmatched) {
+      String word = unmatched.getUnmatched().get(0);
+      String nearest = unmatched.getSuggestions().stream().findFirst().orElse("");
+      message =
+          (word.startsWith("-") ? "no option " : "no command ")
+              + word
+              + (nearest.isEmpty() ? "" : "; did you mean " + nearest + "?");
     }
+    output.note(message);
+    output.note(help);
     return ExitCode.ERROR;
   }
 

@@ -14,8 +14,10 @@ import java.util.stream.Collectors;
 
 /** Figures for people: a heading a channel, a row a figure, no wider than 80 columns. */
 public final class FiguresText {
+  private static final int COLUMNS = 80;
   private static final int NAME_COLUMNS = 30;
-  private static final int SHARE_COLUMNS = 7;
+  private static final int SHARE_COLUMNS = 9;
+  private static final int PLAIN_DIGITS = 6;
   private static final String INDENT = "  ";
 
   private final Locations locations;
@@ -98,14 +100,14 @@ public final class FiguresText {
         INDENT.repeat(3)
             + Terminal.padded(Terminal.line(operand.name()), NAME_COLUMNS - 4)
             + " "
-            + value(operand.value(), operand.unit())
+            + value(operand.value(), operand.unit(), false)
             + style.faint(Terminal.line(where)));
   }
 
   private static String state(Figure figure) {
     Figure.State state = figure.state();
     if (state instanceof Figure.State.Value v) {
-      return value(v.value(), figure.unit());
+      return value(v.value(), figure.unit(), figure.isShare());
     }
     if (state instanceof Figure.State.Missing missing) {
       return "- lacks "
@@ -121,11 +123,9 @@ public final class FiguresText {
         : "- a value it rests on is wrong";
   }
 
-  /** The unit 1 also counts things; those are no shares. */
-  private static String value(double value, String unit) {
-    boolean count = unit.equals("1") && value == Math.rint(value) && Math.abs(value) != 1;
-    return count && value != 0
-        ? Engineering.digits(value, 12)
+  private static String value(double value, String unit, boolean share) {
+    return unit.equals("1") && !share
+        ? Engineering.digits(value, PLAIN_DIGITS)
         : Engineering.message(value, unit);
   }
 
@@ -170,7 +170,7 @@ public final class FiguresText {
     budgetLine("hard limit", budget.hardLimit(), unit);
     budget.needs().ifPresent(needs -> budgetLine("needs", needs, unit));
     budget.margin().ifPresent(margin -> budgetLine("margin", margin, unit));
-    line(INDENT.repeat(2) + style.faint(Terminal.padded("share of the variance, limit", 0)));
+    line(INDENT.repeat(2) + style.faint("share of the variance, and limit"));
     budget.rows().forEach(row -> row(row, unit));
   }
 
@@ -194,6 +194,7 @@ public final class FiguresText {
   }
 
   private void line(String text) {
-    out.append(text.stripTrailing()).append('\n');
+    Terminal.wrapped(text, COLUMNS, NAME_COLUMNS + 3).forEach(
+        part -> out.append(part).append('\n'));
   }
 }

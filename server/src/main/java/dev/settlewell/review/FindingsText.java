@@ -38,12 +38,11 @@ public final class FindingsText {
 
   private void finding(Reviewed sheet, Finding finding) {
     head(finding);
-    locations.text(finding.place()).ifPresent(
-        text -> {
-          Quotation quotation = Quotation.of(text, finding.place().span());
-          line(INDENT + INDENT + quotation.line());
-          line(INDENT + INDENT + style.severity(finding.severity(), quotation.marks()));
-        });
+    locations
+        .text(finding.place())
+        .map(text -> Quotation.of(text, finding.place().span()))
+        .filter(quotation -> !quotation.line().isBlank())
+        .ifPresent(quotation -> quote(quotation, finding));
     line(INDENT + Terminal.line(finding.message()));
     facts(finding.facts());
     finding.related().forEach(this::related);
@@ -62,6 +61,11 @@ public final class FindingsText {
             + style.severity(finding.severity(), severity)
             + " "
             + style.bold(finding.name()));
+  }
+
+  private void quote(Quotation quotation, Finding finding) {
+    line(INDENT + INDENT + quotation.line());
+    line(INDENT + INDENT + style.severity(finding.severity(), quotation.marks()));
   }
 
   private void facts(List<Fact> facts) {

@@ -1,8 +1,13 @@
 package dev.settlewell.review;
 
+import java.util.ArrayList;
+import java.util.List;
+import java.util.regex.Pattern;
+
 /** Text as a terminal may show it. */
 final class Terminal {
   private static final int REPLACEMENT = 0xFFFD;
+  private static final Pattern COLOUR = Pattern.compile("\u001b\\[[0-9;]*m");
 
   private Terminal() {}
 
@@ -45,6 +50,43 @@ final class Terminal {
         || 0xFF00 <= c && c <= 0xFF60 || 0xFFE0 <= c && c <= 0xFFE6
         || 0x1F300 <= c && c <= 0x1FAFF || 0x20000 <= c && c <= 0x3FFFD;
     return wide ? 2 : 1;
+  }
+
+  /**
+   * Breaks a line at blanks where it is longer than {@code columns}; what goes on stands below, so
+   * many columns in. The marks of colours count as nothing.
+   */
+  static List<String> wrapped(String line, int columns, int indentation) {
+    List<String> parts = new ArrayList<>();
+    String rest = line.stripTrailing();
+    while (shownWidth(rest) > columns) {
+      int end = breakAt(rest, columns, parts.isEmpty() ? 0 : indentation);
+      if (end < 0) {
+        break;
+      }
+      parts.add(rest.substring(0, end).stripTrailing());
+      rest = " ".repeat(indentation) + rest.substring(end).stripLeading();
+    }
+    parts.add(rest);
+    return parts;
+  }
+
+  /** The last blank that fits behind the indentation, else the first one behind; -1: none. */
+  private static int breakAt(String line, int columns, int indentation) {
+    int best = -1;
+    int start = line.length() - line.stripLeading().length();
+    for (int i = line.indexOf(' ', Math.max(start, indentation)); i >= 0;
+        i = line.indexOf(' ', i + 1)) {
+      if (best >= 0 && shownWidth(line.substring(0, i)) > columns) {
+        break;
+      }
+      best = i;
+    }
+    return best;
+  }
+
+  private static int shownWidth(String line) {
+    return width(COLOUR.matcher(line).replaceAll(""));
   }
 
   static String padded(String text, int columns) {
