@@ -16,13 +16,13 @@ import dev.settlewell.vocabulary.NameKind;
 import dev.settlewell.vocabulary.Shape;
 import dev.settlewell.vocabulary.Vocabulary;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collections;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 
 /**
  * Turns a tree into slots as the schema says: one method a shape. It knows no key by name but the
@@ -36,6 +36,7 @@ final class Binder {
   private static final String DEFAULTS = "defaults";
 
   private final Vocabulary vocabulary;
+  private final SourceText text;
   private final Report report;
   private final ValueReader values;
   private final LongForm longForm;
@@ -44,6 +45,7 @@ final class Binder {
 
   Binder(Vocabulary vocabulary, SourceText text, Report report) {
     this.vocabulary = vocabulary;
+    this.text = text;
     this.report = report;
     this.values = new ValueReader(report);
     this.longForm = new LongForm(values, report);
@@ -65,8 +67,9 @@ final class Binder {
     if (node instanceof Node.Broken) {
       return new Slot.Wrong<>(node.place(), "", pointer);
     }
-    if (node instanceof Node.Absent && !mayBeAbsent(key)) {
-      return absent(key, keyPlace, pointer);
+    boolean mayBeAbsent = key.shape() == Shape.MAP || key.shape() == Shape.PART;
+    if (node instanceof Node.Absent && !mayBeAbsent) {
+      return absent(key.examples(), keyPlace, pointer);
     }
     return switch (key.shape()) {
       case PART -> part(vocabulary.kind(key.kind().orElseThrow()), node, keyPlace, pointer, scope);
@@ -77,17 +80,12 @@ final class Binder {
     };
   }
 
-  private boolean mayBeAbsent(Key key) {
-    return key.shape() == Shape.MAP
-        || key.kind().map(kind -> vocabulary.kind(kind).mayBeEmpty()).orElse(false);
-  }
-
-  private Slot<?> absent(Key key, Place keyPlace, String pointer) {
-    String example = key.examples().isEmpty() ? "" : ", such as `" + key.examples().get(0) + "`";
+  private <T> Slot<T> absent(List<String> examples, Place keyPlace, String pointer) {
     report.add(
         Problem.Kind.WRONG_KIND,
         keyPlace,
-        "`" + key.name() + "` has no value: write one" + example + ", or remove the key");
+        "`" + text.slice(keyPlace.span()) + "` has no value: write one" + example(examples)
+            + ", or remove the key");
     return new Slot.Wrong<>(keyPlace, "", pointer);
   }
 
@@ -99,11 +97,10 @@ final class Binder {
     }
     boolean takesLongForm = key.shape() == Shape.QUANTITY || key.shape() == Shape.COMPONENT;
     if (takesLongForm && node instanceof Node.Mapping mapping) {
-      Set<Node.Entry> split = slips.splitAtComma(mapping);
-      Entries entries = Entries.of(mapping, split, report);
+      Entries entries = Entries.of(mapping, report);
       slips.unknownKeys(vocabulary.longForm(), entries);
       Slot<Toleranced> slot =
-          longForm.read(key, entries, !split.isEmpty(), keyPlace, mapping.place(), pointer, scope);
+          longForm.read(key, entries, keyPlace, mapping.place(), pointer, scope);
       return key.takesWordOrQuantity() ? slot.map(Either::quantity) : slot;
     }
     return wrongKind(key, node, pointer, "takes one value" + example(key.examples()));
@@ -112,6 +109,9 @@ final class Binder {
   // --- mappings --------------------------------------------------------------------------------
 
   private Slot<Part> part(Kind kind, Node node, Place keyPlace, String pointer, Scope scope) {
+    if (node instanceof Node.Absent && !kind.mayBeEmpty()) {
+      return absent(kind.examples(), keyPlace, pointer);
+    }
     Place place = node instanceof Node.Absent ? keyPlace : node.place();
     Part part;
     if (node instanceof Node.Mapping mapping) {
@@ -123,8 +123,6 @@ final class Binder {
       part = shortForm(kind, node, keyPlace, pointer, scope);
     } else if (node instanceof Node.Sequence sequence && !kind.columns().isEmpty()) {
       return columns(kind, sequence, keyPlace, pointer, scope);
-    } else if (node instanceof Node.Scalar scalar && slips.blankMissing(kind.keys().keySet(), scalar)) {
-      return new Slot.Wrong<>(scalar.place(), scalar.text(), pointer);
     } else {
       String form = kind.columns().isEmpty() ? "keys of its own" : "a pair in brackets";
       report.add(
@@ -178,8 +176,7 @@ final class Binder {
 
   private Part mapping(
       Kind kind, Node.Mapping mapping, Place keyPlace, String pointer, Scope outer) {
-    Set<Node.Entry> split = slips.splitAtComma(mapping);
-    Entries entries = Entries.of(mapping, split, report);
+    Entries entries = Entries.of(mapping, report);
     slips.unknownKeys(kind, entries);
     Map<String, Slot<?>> early = new HashMap<>();
     Scope scope = scopeInside(kind, entries, early, keyPlace, pointer, outer);
@@ -192,10 +189,6 @@ final class Binder {
       if (slot == null) {
         slot = slot(kind, key, entries, mapping, keyPlace, pointer, scope);
       }
-      boolean splitHere = split.stream().anyMatch(entry -> entry.key().text().equals(key.name()));
-      if (slot.isMissing() && splitHere) {
-        slot = new Slot.Wrong<>(mapping.place(), "", slot.pointer());
-      }
       if (slot.isMissing() && key.required()) {
         missing(kind, key, keyPlace);
       }
@@ -205,11 +198,23 @@ final class Binder {
   }
 
   private void missing(Kind kind, Key key, Place keyPlace) {
-    String whole = kind.name().equals(Vocabulary.SHEET) ? "the sheet" : "this " + kind.name();
     report.add(
         Problem.Kind.MISSING_KEY,
         keyPlace,
-        whole + " lacks the key `" + key.name() + "`" + example(key.examples()));
+        labelled(kind, keyPlace) + " lacks the key `" + key.name() + "`" + example(key.examples()));
+  }
+
+  private String labelled(Kind kind, Place keyPlace) {
+    String at = text.slice(keyPlace.span());
+    if (kind.name().equals(Vocabulary.SHEET)) {
+      return "the sheet";
+    }
+    if (at.equals(kind.name())) {
+      return "`" + at + "`";
+    }
+    boolean named =
+        Arrays.stream(NameKind.values()).anyMatch(name -> name.word().equals(kind.name()));
+    return named ? kind.name() + " `" + at + "`" : "this " + kind.name();
   }
 
   private Slot<?> slot(
@@ -225,7 +230,7 @@ final class Binder {
             .anyMatch(k -> k.partOf().filter(key.name()::equals).isPresent()
                 && entries.find(k.name()).isPresent());
     if (inPieces) {
-      return longForm.read(key, entries, false, keyPlace, mapping.place(), pointer, scope);
+      return longForm.read(key, entries, keyPlace, mapping.place(), pointer, scope);
     }
     String below = pointer + "/" + escaped(key.name());
     Optional<Node.Entry> entry = entries.find(key.name());
@@ -308,8 +313,7 @@ final class Binder {
       List<Slot<?>> slots = new ArrayList<>();
       for (int i = 0; i < sequence.items().size(); i++) {
         Node element = sequence.items().get(i);
-        Place elementKey = element instanceof Node.Absent ? keyPlace : element.place();
-        slots.add(value(item, element, elementKey, pointer + "/" + i, scope));
+        slots.add(value(item, element, itemKey(element, keyPlace), pointer + "/" + i, scope));
       }
       boolean holds = Lists.check(key, slots, sequence, report);
       return holds
@@ -324,16 +328,28 @@ final class Binder {
       slips.listAsMapping(key, mapping);
       return new Slot.Wrong<>(node.place(), "", pointer);
     }
-    if (node instanceof Node.Scalar scalar && scalar.inset() == 0 && !scalar.text().contains(",")) {
-      String text = "[" + scalar.text() + "]";
+    boolean ofScalars =
+        item.shape() == Shape.PART
+            ? vocabulary.kind(item.kind().orElseThrow()).shortKey().isPresent()
+            : item.shape() != Shape.ONE_KIND;
+    if (ofScalars && node instanceof Node.Scalar scalar && !scalar.text().contains(",")) {
+      String list = "[" + text.slice(scalar.place().span()) + "]";
       report.add(
           Problem.Kind.WRONG_KIND,
           node.place(),
-          "`" + key.name() + "` takes a list: `" + text + "`",
-          new Fix("write `" + text + "`", List.of(new Edit(node.place(), text)), true));
+          "`" + key.name() + "` takes a list: `" + list + "`",
+          new Fix("write `" + list + "`", List.of(new Edit(node.place(), list)), true));
       return new Slot.Wrong<>(node.place(), scalar.text(), pointer);
     }
     return wrongKind(key, node, pointer, "takes a list" + example(key.examples()));
+  }
+
+  /** What marks an item that lacks something: its first key, never the whole block. */
+  private static Place itemKey(Node item, Place listKey) {
+    if (item instanceof Node.Mapping mapping && !mapping.entries().isEmpty()) {
+      return mapping.entries().get(0).key().place();
+    }
+    return item instanceof Node.Absent ? listKey : item.place();
   }
 
   /** {@code {mains: 20 mV}} as the list of its entries: the key and the value each fill one key. */
@@ -342,7 +358,7 @@ final class Binder {
     Key first = kind.keys().get(key.entries().get(0));
     Key second = kind.keys().get(key.entries().get(1));
     List<Slot<?>> slots = new ArrayList<>();
-    for (Node.Entry entry : Entries.of(mapping, Set.of(), report).byKey().values()) {
+    for (Node.Entry entry : Entries.of(mapping, report).byKey().values()) {
       String below = pointer + "/" + escaped(entry.key().text());
       Place name = entry.key().place();
       Map<String, Slot<?>> both = new LinkedHashMap<>();
@@ -367,12 +383,11 @@ final class Binder {
     }
     Key item = key.item().orElseThrow();
     Key.MapNames names = key.names().orElseThrow();
-    Set<Node.Entry> split = slips.splitAtComma(mapping);
     Map<String, Slot<?>> slots = new LinkedHashMap<>();
-    for (Node.Entry entry : Entries.of(mapping, split, report).byKey().values()) {
+    for (Node.Entry entry : Entries.of(mapping, report).byKey().values()) {
       Node.Scalar name = entry.key();
       Optional<String> canonical = Names.check(names, name, report);
-      if (canonical.isEmpty() || slips.blankMissing(entry)) {
+      if (canonical.isEmpty()) {
         continue;
       }
       String below = pointer + "/" + escaped(canonical.get());

@@ -4,17 +4,13 @@ import dev.settlewell.syntax.Node;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 
 /** The entries of one mapping by key: the first of each, the others reported. */
 record Entries(Map<String, Node.Entry> byKey) {
 
-  static Entries of(Node.Mapping mapping, Set<Node.Entry> without, Report report) {
+  static Entries of(Node.Mapping mapping, Report report) {
     Map<String, Node.Entry> byKey = new LinkedHashMap<>();
     for (Node.Entry entry : mapping.entries()) {
-      if (without.contains(entry)) {
-        continue;
-      }
       String name = entry.key().text();
       Node.Entry first = byKey.putIfAbsent(name, entry);
       if (first != null) {

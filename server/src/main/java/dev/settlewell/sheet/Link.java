@@ -179,7 +179,7 @@ public final class Link {
         words.add(kind.word());
       }
     }
-    return String.join(" or ", words);
+    return String.join(", ", words).replaceFirst(", ([^,]*)$", " or $1");
   }
 
   /**

@@ -44,18 +44,16 @@ final class LongForm {
 
   /**
    * @param entries those of the mapping; keys that are no piece of a long form are not looked at
-   * @param broken true where a piece was lost to a slip that is reported already
    */
   Slot<Toleranced> read(
       Key key,
       Entries entries,
-      boolean broken,
       Place keyPlace,
       Place place,
       String pointer,
       Scope scope) {
     Map<String, Toleranced> amounts = new HashMap<>();
-    boolean whole = !broken;
+    boolean whole = true;
     for (String name : AMOUNTS) {
       Optional<Node.Entry> entry = entries.find(name);
       if (entry.isPresent()) {

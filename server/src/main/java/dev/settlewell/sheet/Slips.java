@@ -12,15 +12,16 @@ import dev.settlewell.vocabulary.Kind;
 import dev.settlewell.vocabulary.Nearest;
 import dev.settlewell.vocabulary.Vocabulary;
 import java.util.ArrayList;
-import java.util.Collection;
-import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
-/** The usual slips of writing YAML, each with the way to mend it. */
+/**
+ * Slips in the shape of a sheet that only the schema shows, each with the way to mend it. Those that
+ * YAML itself shows are met where the tree is read.
+ */
 final class Slips {
   private static final Pattern WHOLE_NUMBER = Pattern.compile("[-+±]?\\d+");
   private static final Pattern DIGITS_AND_UNIT = Pattern.compile("(\\d+)(\\s*\\D.*)?");
@@ -36,31 +37,6 @@ final class Slips {
   }
 
   // --- commas ----------------------------------------------------------------------------------
-
-  /**
-   * {@code {upper: 4,7 kΩ}}: YAML splits at the comma, and {@code 7 kΩ} becomes a key. Reports each
-   * such pair and gives its two entries, which mean nothing by themselves.
-   */
-  Set<Node.Entry> splitAtComma(Node.Mapping mapping) {
-    Set<Node.Entry> split = new HashSet<>();
-    List<Node.Entry> entries = mapping.entries();
-    for (int i = 0; mapping.flow() && i + 1 < entries.size(); i++) {
-      Node.Entry first = entries.get(i);
-      Node.Entry second = entries.get(i + 1);
-      boolean pair =
-          first.value() instanceof Node.Scalar whole
-              && second.value() instanceof Node.Absent
-              && isSplit(whole.text(), second.key().text());
-      if (pair) {
-        Place from = first.value().place();
-        splitNumber(from, ((Node.Scalar) first.value()).text(), second.key());
-        split.add(first);
-        split.add(second);
-        i++;
-      }
-    }
-    return split;
-  }
 
   private static boolean isSplit(String whole, String rest) {
     return WHOLE_NUMBER.matcher(whole).matches() && DIGITS_AND_UNIT.matcher(rest).matches();
@@ -113,7 +89,7 @@ final class Slips {
     Set<String> known = kind.keys().keySet();
     for (Node.Entry entry : entries.byKey().values()) {
       Node.Scalar key = entry.key();
-      if (known.contains(key.text()) || blankMissing(entry)) {
+      if (known.contains(key.text())) {
         continue;
       }
       String whole = kind.name().equals(Vocabulary.SHEET) ? "a sheet" : "`" + kind.name() + "`";
@@ -130,33 +106,6 @@ final class Slips {
     }
   }
 
-  /** {@code {min:4 pF}}: without the blank the whole is a key with nothing behind it. */
-  boolean blankMissing(Node.Entry entry) {
-    return entry.value() instanceof Node.Absent && blankMissing(Set.of(), entry.key());
-  }
-
-  /**
-   * @param known the keys that may stand before the colon; empty: any
-   */
-  boolean blankMissing(Collection<String> known, Node.Scalar scalar) {
-    int colon = scalar.text().indexOf(':');
-    if (colon <= 0 || !scalar.exact() || scalar.inset() > 0) {
-      return false;
-    }
-    String before = scalar.text().substring(0, colon).strip();
-    if (!known.isEmpty() && !known.contains(before)) {
-      return false;
-    }
-    int at = scalar.place().start() + colon + 1;
-    Place gap = new Place(scalar.place().sheet(), Span.at(at));
-    report.add(
-        Problem.Kind.SYNTAX,
-        scalar.place(),
-        "a blank is missing after the colon of `" + before + ":`",
-        new Fix("put a blank after the colon", List.of(new Edit(gap, " ")), true));
-    return true;
-  }
-
   // --- kinds -----------------------------------------------------------------------------------
 
   void unknownKind(Key key, Node.Scalar name) {
@@ -171,9 +120,6 @@ final class Slips {
 
   /** {@code - resistor 1 kΩ}, {@code sensor: voltage}: a text where a key belongs. */
   void kindAsText(Key key, Node.Scalar scalar) {
-    if (blankMissing(key.kinds(), scalar)) {
-      return;
-    }
     String written = scalar.text().strip();
     int blank = written.indexOf(' ');
     String word = blank < 0 ? written : written.substring(0, blank);
@@ -204,10 +150,7 @@ final class Slips {
             kind.get().equals(word)));
   }
 
-  /**
-   * The commonest slip: {@code - amplifier:} with its keys at the same depth, so that {@code gain}
-   * stands beside {@code amplifier} and not below it.
-   */
+  /** {@code thermistor:} with its keys at the same depth, so that they stand beside it. */
   boolean keysBesideTheirKind(Kind kind, Node.Mapping mapping) {
     List<Node.Entry> entries = mapping.entries();
     Node.Entry first = entries.get(0);

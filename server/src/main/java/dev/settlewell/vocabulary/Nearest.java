@@ -15,7 +15,7 @@ public final class Nearest {
    */
   public static Optional<String> of(String text, Collection<String> known) {
     String written = text.toLowerCase(Locale.ROOT).replace('_', '-').replace(' ', '-');
-    int limit = Math.max(1, written.length() / 3);
+    int limit = written.length() < 3 ? 0 : written.length() / 3;
     String best = null;
     for (String word : known) {
       if (Math.abs(word.length() - written.length()) > limit) {
