@@ -80,7 +80,11 @@ final class Connection {
       takeUnfit(text);
       return true;
     }
-    return message == null || take(message);
+    if (message == null) {
+      refuse(ResponseErrorCode.ParseError, "an empty message");
+      return true;
+    }
+    return take(message);
   }
 
   private boolean take(Message message) {

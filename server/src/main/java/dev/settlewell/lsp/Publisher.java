@@ -1,15 +1,17 @@
 package dev.settlewell.lsp;
 
-import dev.settlewell.assist.Checked;
+import dev.settlewell.sheet.Sheet;
+import java.util.HashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.ConcurrentHashMap;
+import java.util.stream.Collectors;
 import org.eclipse.lsp4j.Diagnostic;
-import org.eclipse.lsp4j.DiagnosticSeverity;
-import org.eclipse.lsp4j.Position;
 import org.eclipse.lsp4j.PublishDiagnosticsParams;
-import org.eclipse.lsp4j.Range;
 
 /**
  * Pushes findings to clients that do not ask for them.
@@ -19,66 +21,61 @@ import org.eclipse.lsp4j.Range;
  * Everything is published on the worker, so an older list never follows a newer one.
  */
 final class Publisher {
+  /** What a client was last told of a sheet. */
+  private record Shown(String uri, Integer version, List<Diagnostic> diagnostics) {}
+
   private final Session session;
   private final Set<String> waiting = ConcurrentHashMap.newKeySet();
-  private final Set<String> shown = ConcurrentHashMap.newKeySet();
+
+  /** Sheets by name with the names of those they use. Touched on the worker alone, as the next. */
+  private final Map<String, Set<String>> uses = new HashMap<>();
+
+  private final Map<String, Shown> shown = new HashMap<>();
 
   Publisher(Session session) {
     this.session = session;
   }
 
   /** The sheet, or something it rests on, is not what it was; also where it was closed. */
-  void changed(String uri) {
-    if (session.view().abilities().pulls() || !waiting.add(Uris.name(uri))) {
-      return;
-    }
-    session.worker().post(Worker.Rank.EDIT, () -> publish(uri));
+  void changed(String name) {
+    enqueue(name, Worker.Rank.EDIT);
   }
 
-  private void publish(String uri) {
-    String name = Uris.name(uri);
+  /** Everything that is open or shown, for a reason that may concern any of it. */
+  void allChanged() {
+    session.worker().post(Worker.Rank.EDIT, this::enqueueAll);
+  }
+
+  private void enqueueAll() {
+    Set<String> names = new LinkedHashSet<>(shown.keySet());
+    View view = session.view();
+    names.addAll(view.sheets());
+    for (String name : names) {
+      boolean open = view.drafts().get(name).isPresent();
+      enqueue(name, open ? Worker.Rank.EDIT : Worker.Rank.BACKGROUND);
+    }
+  }
+
+  private void enqueue(String name, Worker.Rank rank) {
+    if (!session.view().abilities().pulls() && waiting.add(name)) {
+      session.worker().post(rank, () -> publish(name));
+    }
+  }
+
+  private void publish(String name) {
     waiting.remove(name);
     View view = session.view();
     Optional<Draft> draft = view.drafts().get(name);
-    List<Diagnostic> diagnostics = draft.isPresent() ? diagnostics(view, uri) : List.of();
-    if (isOutdated(draft)) {
-      return;
+    boolean wanted = draft.isPresent() || view.sheets().contains(name);
+    List<Diagnostic> diagnostics =
+        wanted ? Diagnosis.of(name, view, session.faults()) : List.of();
+    if (!isOutdated(draft)) {
+      show(name, draft, diagnostics);
     }
-    boolean wasShown = !diagnostics.isEmpty() ? !shown.add(name) : shown.remove(name);
-    if (draft.isPresent() || wasShown) {
-      Integer version = draft.map(Draft::version).orElse(null);
-      session
-          .client()
-          .publish(
-              new PublishDiagnosticsParams(
-                  draft.map(Draft::uri).orElse(uri), diagnostics, version));
+    remember(name, view, wanted);
+    if (draft.isPresent()) {
+      dependants(name).forEach(this::changed);
     }
-  }
-
-  private List<Diagnostic> diagnostics(View view, String uri) {
-    try {
-      return view.checked(uri)
-          .map((Checked checked) -> new DiagnosticMapper(view, checked).all())
-          .orElse(List.of());
-    } catch (RuntimeException | StackOverflowError fault) {
-      session.faults().report("checking " + uri, fault);
-      return List.of(internalFault(fault));
-    }
-  }
-
-  /** So that an editor without a log still tells why a sheet has no findings. */
-  private static Diagnostic internalFault(Throwable fault) {
-    Position start = new Position(0, 0);
-    String message =
-        "Settlewell made a mistake and could not check this sheet. Please report this text together"
-            + " with the sheet: "
-            + Faults.describe(fault);
-    return new Diagnostic(
-        new Range(start, start),
-        message,
-        DiagnosticSeverity.Error,
-        DiagnosticMapper.SOURCE,
-        "internal-fault");
   }
 
   /** A newer version waits for its own turn: what was computed would only flicker. */
@@ -88,5 +85,48 @@ final class Publisher {
         && now.isPresent()
         && now.get() != draft.get()
         && waiting.contains(draft.get().name());
+  }
+
+  private void show(String name, Optional<Draft> draft, List<Diagnostic> diagnostics) {
+    String uri = draft.map(Draft::uri).orElseGet(() -> Uris.uri(name));
+    Shown before = shown.get(name);
+    if (before != null && draft.isEmpty()) {
+      uri = before.uri();
+    }
+    Shown now = new Shown(uri, draft.map(Draft::version).orElse(null), diagnostics);
+    boolean nothingToTell = before == null && draft.isEmpty() && diagnostics.isEmpty();
+    if (nothingToTell || now.equals(before)) {
+      return;
+    }
+    if (draft.isEmpty() && diagnostics.isEmpty()) {
+      shown.remove(name);
+    } else {
+      shown.put(name, now);
+    }
+    session.client().publish(new PublishDiagnosticsParams(uri, diagnostics, now.version()));
+  }
+
+  private void remember(String name, View view, boolean wanted) {
+    if (!wanted) {
+      uses.remove(name);
+      return;
+    }
+    try {
+      uses.put(
+          name,
+          view.named(name)
+              .map(c -> c.linked().used().stream().map(Sheet::path).collect(Collectors.toSet()))
+              .orElse(Set.of()));
+    } catch (RuntimeException | StackOverflowError reported) {
+      uses.remove(name);
+    }
+  }
+
+  private List<String> dependants(String name) {
+    return uses.entrySet().stream()
+        .filter(entry -> entry.getValue().contains(name))
+        .map(Map.Entry::getKey)
+        .filter(dependant -> !Objects.equals(dependant, name))
+        .toList();
   }
 }

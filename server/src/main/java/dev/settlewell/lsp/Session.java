@@ -1,10 +1,12 @@
 package dev.settlewell.lsp;
 
+import java.util.List;
 import java.util.function.UnaryOperator;
 
 /**
  * One client from its first message to its last. The only thing that changes is which {@link View}
- * is the present one, and only the thread that reads messages changes it.
+ * is the present one: mostly the thread that reads messages changes it, and the worker where it has
+ * found files.
  */
 final class Session {
   private final Client client;
@@ -16,14 +18,16 @@ final class Session {
     this.client = client;
     this.faults = new Faults(client);
     this.worker = new Worker(fault -> faults.report("background work", fault));
-    this.view = new View(Abilities.of(null), Settings.DEFAULT, Drafts.NONE, desk);
+    this.view =
+        new View(
+            Abilities.of(null), Settings.DEFAULT, Drafts.NONE, List.of(), List.of(), desk);
   }
 
   View view() {
     return view;
   }
 
-  void change(UnaryOperator<View> step) {
+  synchronized void change(UnaryOperator<View> step) {
     view = step.apply(view);
   }
 

@@ -55,19 +55,20 @@ final class TextSync {
   }
 
   private void close(DidCloseTextDocumentParams params) {
-    String uri = params.getTextDocument().getUri();
-    session.change(view -> view.with(view.drafts().without(Uris.name(uri))));
-    publisher.changed(uri);
+    String name = Uris.name(params.getTextDocument().getUri());
+    session.change(view -> view.with(view.drafts().without(name)));
+    publisher.changed(name);
   }
 
+  /** Clients without a watcher tell of nothing else, so files on disk are looked at now. */
   private void save(DidSaveTextDocumentParams params) {
-    publisher.changed(params.getTextDocument().getUri());
+    publisher.allChanged();
   }
 
   private void keep(Draft draft) {
     session.change(view -> view.with(view.drafts().with(draft)));
     if (View.isSheet(draft.name())) {
-      publisher.changed(draft.uri());
+      publisher.changed(draft.name());
     }
   }
 

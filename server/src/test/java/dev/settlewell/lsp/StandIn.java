@@ -10,6 +10,7 @@ import dev.settlewell.syntax.Node;
 import dev.settlewell.syntax.SyntaxTree;
 import dev.settlewell.text.Related;
 import dev.settlewell.text.SourceText;
+import dev.settlewell.vocabulary.Vocabulary;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
@@ -28,6 +29,21 @@ final class StandIn implements Desk {
   public Optional<Checked> check(String name, Map<String, SourceText> open) {
     checks.incrementAndGet();
     return Optional.ofNullable(open.get(name)).map(StandIn::check);
+  }
+
+  @Override
+  public List<Finding> trial(String name, String content, Map<String, SourceText> open) {
+    return check(SourceText.of(name, content)).findings();
+  }
+
+  @Override
+  public Vocabulary vocabulary() {
+    return Vocabulary.load();
+  }
+
+  @Override
+  public List<String> sheetsBelow(String folder) {
+    return List.of();
   }
 
   private static Checked check(SourceText text) {
