@@ -9,7 +9,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Supplier;
 
 /** Computes every figure of a sheet: a pure function of the linked sheet. */
 public final class Analyzer {
@@ -24,12 +23,38 @@ public final class Analyzer {
     return new Analyzer(linked).run();
   }
 
-  private Analysis run() {
+  /**
+   * The budgets of one channel by random trials (JCGM 101), one for each scan that samples it; far
+   * too slow for a keystroke, so only on demand.
+   */
+  public static List<Simulation> simulate(Linked linked, String channel, long seed, int trials) {
+    Analyzer analyzer = new Analyzer(linked);
+    analyzer.bindTimings();
+    List<Simulation> simulations = new ArrayList<>();
+    for (ScanTiming timing : analyzer.timings.values()) {
+      if (timing.order().contains(channel)) {
+        Neighbours neighbours = analyzer.neighbours(timing);
+        ChannelModel model = neighbours.models().get(channel);
+        if (model != null && model.complete()) {
+          simulations.add(
+              new ChannelAnalysis(model, timing, neighbours.pins().get(channel))
+                  .simulate(neighbours.settling(model, timing), seed, trials));
+        }
+      }
+    }
+    return simulations;
+  }
+
+  private void bindTimings() {
     for (Named<Part> scan : linked.sheet().scans().values()) {
       converterOf(scan)
           .ifPresent(
               converter -> timings.put(scan.name(), ScanTiming.bind(linked, scan, converter)));
     }
+  }
+
+  private Analysis run() {
+    bindTimings();
     Map<String, ScanFigures> scans = new LinkedHashMap<>();
     for (Named<Part> scan : linked.sheet().scans().values()) {
       ScanTiming timing = timings.get(scan.name());
@@ -70,13 +95,19 @@ public final class Analyzer {
         .filter(converter -> converter.value().isStated());
   }
 
-  private ScanFigures scan(Named<Part> scan, ScanTiming timing) {
-    List<ScanTiming> others =
-        scansOf(timing.converter().name()).stream().filter(t -> t != timing).toList();
+  /** The channels a scan's settling depends on: its own, and those other scans end with. */
+  private record Neighbours(
+      Map<String, ChannelModel> models, Map<String, PinRange> pins, List<String> othersLast) {
+    SettlingStudy settling(ChannelModel model, ScanTiming timing) {
+      return new SettlingStudy(model, timing, models, pins, othersLast);
+    }
+  }
+
+  private Neighbours neighbours(ScanTiming timing) {
     Map<String, ChannelModel> models = new LinkedHashMap<>();
     timing.order().forEach(name -> model(name, timing.converter(), models));
     List<String> othersLast = new ArrayList<>();
-    for (ScanTiming other : others) {
+    for (ScanTiming other : others(timing)) {
       if (!other.order().isEmpty()) {
         String last = other.order().get(other.order().size() - 1);
         model(last, timing.converter(), models);
@@ -90,17 +121,27 @@ public final class Analyzer {
             pins.put(name, PinRange.of(model));
           }
         });
+    return new Neighbours(models, pins, othersLast);
+  }
+
+  private List<ScanTiming> others(ScanTiming timing) {
+    return scansOf(timing.converter().name()).stream().filter(t -> t != timing).toList();
+  }
+
+  private ScanFigures scan(Named<Part> scan, ScanTiming timing) {
+    Neighbours neighbours = neighbours(timing);
     Map<String, ChannelFigures> channels = new LinkedHashMap<>();
     for (String name : timing.order()) {
-      ChannelModel model = models.get(name);
+      ChannelModel model = neighbours.models().get(name);
       if (model != null && !channels.containsKey(name)) {
         channels.put(
             name,
-            new ChannelAnalysis(model, timing, pins.get(name))
-                .run(() -> new SettlingStudy(model, timing, models, pins, othersLast)));
+            new ChannelAnalysis(model, timing, neighbours.pins().get(name))
+                .run(Optional.of(neighbours.settling(model, timing))));
       }
     }
-    return new ScanFigures(scan, new Figures(TimingFigures.ofScan(timing, others)), channels);
+    return new ScanFigures(
+        scan, new Figures(TimingFigures.ofScan(timing, others(timing))), channels);
   }
 
   private void model(String name, Named<Part> converter, Map<String, ChannelModel> into) {
@@ -130,7 +171,7 @@ public final class Analyzer {
       ChannelModel model = ChannelModel.bind(linked, channel, only);
       if (model != null) {
         PinRange pin = model.complete() ? PinRange.of(model) : null;
-        unscanned.put(channel.name(), new ChannelAnalysis(model, null, pin).run(() -> null));
+        unscanned.put(channel.name(), new ChannelAnalysis(model, null, pin).run(Optional.empty()));
       }
     }
     return unscanned;
@@ -143,6 +184,7 @@ public final class Analyzer {
     private final PinRange pin;
     private final List<Figure> figures = new ArrayList<>();
     private final List<String> faults = new ArrayList<>();
+    private final List<Place> typicalOnly = new ArrayList<>();
 
     ChannelAnalysis(ChannelModel model, ScanTiming timing, PinRange pin) {
       this.model = model;
@@ -150,7 +192,18 @@ public final class Analyzer {
       this.pin = pin;
     }
 
-    ChannelFigures run(Supplier<SettlingStudy> settlingStudy) {
+    /** The budget alone, by random trials. */
+    Simulation simulate(SettlingStudy settling, long seed, int trials) {
+      settling.run();
+      FrequencyStudy frequency = new FrequencyStudy(model, timing);
+      frequency.run();
+      NoiseStudy noise = new NoiseStudy(model, timing, frequency);
+      noise.run();
+      return new BudgetStudy(model, settling, frequency, noise)
+          .simulate(timing.scan().name(), seed, trials);
+    }
+
+    ChannelFigures run(Optional<SettlingStudy> settlingStudy) {
       if (timing != null) {
         attempt("timing", () -> figures.addAll(TimingFigures.ofChannel(model, timing)));
       }
@@ -165,10 +218,11 @@ public final class Analyzer {
         return figures(List.of(), Optional.empty(), List.of());
       }
       attempt("resolution", () -> figures.addAll(ResolutionStudy.figures(model)));
-      SettlingStudy settling = settlingStudy.get();
+      SettlingStudy settling = settlingStudy.orElse(null);
       if (settling != null) {
         attempt("settling", settling::run);
         figures.addAll(settling.figures());
+        typicalOnly.addAll(settling.typicalOnly());
       }
       FrequencyStudy frequency = new FrequencyStudy(model, timing);
       attempt("frequency response", frequency::run);
@@ -200,7 +254,7 @@ public final class Analyzer {
 
     private ChannelFigures figures(
         List<Alias> aliases, Optional<Budget> budget, List<OutputRange> outputs) {
-      List<Place> typicalOnly = model.typicalOnly();
+      typicalOnly.addAll(model.typicalOnly());
       return new ChannelFigures(
           model.channel(),
           Optional.ofNullable(timing).map(ScanTiming::scan),

@@ -5,6 +5,7 @@ import dev.settlewell.sheet.Slot;
 import dev.settlewell.text.Place;
 import dev.settlewell.uncertainty.Coverage;
 import dev.settlewell.uncertainty.Distribution;
+import dev.settlewell.uncertainty.MonteCarlo;
 import dev.settlewell.unit.Basis;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -82,6 +83,10 @@ final class BudgetStudy {
   }
 
   Budget run() {
+    return report(worst());
+  }
+
+  private Case worst() {
     Case worst = null;
     double most = Double.NEGATIVE_INFINITY;
     boolean hard = model.judgesWorstCase();
@@ -98,7 +103,7 @@ final class BudgetStudy {
         }
       }
     }
-    return report(worst);
+    return worst;
   }
 
   private Case at(double x, double ambient) {
@@ -109,6 +114,7 @@ final class BudgetStudy {
     beside.addAll(noise.rows(x));
     beside.addAll(noise.droop());
     rows.addAll(beside);
+    selfHeating(x, rows);
     double rest = beside.stream().mapToDouble(Contribution::limit).sum();
     double settlingLimit =
         rows.stream().filter(r -> r.name().equals("settling")).mapToDouble(Contribution::limit).sum();
@@ -221,6 +227,76 @@ final class BudgetStudy {
           new Contribution(
               "settling-offset", middle, 0, List.of(), true, false, false, places));
     }
+  }
+
+  /** A sensor warmed by its own current reads high: by nothing in a strong flow, by P/δ in still air. */
+  private void selfHeating(double x, List<Contribution> rows) {
+    double rise = model.forward().selfHeating(x);
+    if (rise > 0) {
+      Part sensor = model.part().part("sensor").stated().orElseThrow();
+      rows.add(
+          new Contribution(
+              "self-heating",
+              rise / 2,
+              rise / 2,
+              List.of(new Distribution.Rectangular(rise / 2)),
+              true,
+              false,
+              false,
+              List.of(sensor.quantity("dissipation-constant").place())));
+    }
+  }
+
+  /** The same case by random trials: every parameter drawn from its distribution at once. */
+  Simulation simulate(String scan, long seed, int trials) {
+    Case worst = worst();
+    ForwardModel forward = model.forward();
+    List<Spread> spreads =
+        model.spreads().stream()
+            .filter(s -> !calibratedAway.contains(s.row()))
+            .filter(s -> !s.row().equals(Converter.QUANTIZATION))
+            .toList();
+    List<Distribution> inputs = new ArrayList<>();
+    spreads.forEach(s -> inputs.add(distribution(s, reach(s))));
+    Set<String> moved = new HashSet<>();
+    spreads.forEach(s -> moved.add(s.row()));
+    List<Contribution> beside =
+        worst.rows().stream().filter(row -> !moved.contains(row.name())).toList();
+    beside.forEach(row -> inputs.addAll(row.parts()));
+    double offset = worst.offset();
+    MonteCarlo.Result result =
+        MonteCarlo.run(
+            u -> {
+              double[] p = forward.nominal().clone();
+              for (int i = 0; i < spreads.size(); i++) {
+                Spread s = spreads.get(i);
+                Extent extent = u[i] >= 0 ? s.plus() : s.minus();
+                p[s.parameter()] += u[i] * extent.at(worst.x(), worst.ambient());
+              }
+              double error = forward.error(worst.x(), p) + offset;
+              for (int i = spreads.size(); i < u.length; i++) {
+                error += u[i];
+              }
+              return error;
+            },
+            inputs,
+            seed,
+            trials,
+            PROBABILITY);
+    double expanded = worst.expanded() + Math.abs(offset);
+    double reach = Math.max(Math.abs(result.shortestLow()), Math.abs(result.shortestHigh()));
+    return new Simulation(
+        model.name(),
+        scan,
+        model.unit(),
+        seed,
+        result.trials(),
+        result.mean(),
+        result.standard(),
+        result.shortestLow(),
+        result.shortestHigh(),
+        expanded,
+        Math.abs(reach - expanded) <= 0.05 * expanded);
   }
 
   private Budget report(Case worst) {

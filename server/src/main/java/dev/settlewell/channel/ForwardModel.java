@@ -1,5 +1,6 @@
 package dev.settlewell.channel;
 
+import dev.settlewell.sensor.SelfHeating;
 import java.util.List;
 
 /**
@@ -46,6 +47,27 @@ record ForwardModel(
 
   double error(double x, double[] p) {
     return reported(x, p) - x;
+  }
+
+  /** How much the sensor's own current warms it at x, K; 0 where the sheet does not say. */
+  double selfHeating(double x) {
+    double perKelvin = sensor.dissipationConstant();
+    if (Double.isNaN(perKelvin)) {
+      return 0;
+    }
+    Port own = sensor.port(x, nominal);
+    double driven = sensor.excitationCurrent(nominal);
+    double amperes = Double.isNaN(driven) ? loopCurrent(own) : driven;
+    return SelfHeating.rise(amperes * amperes * own.ohms(), perKelvin);
+  }
+
+  /** The current the path draws through the sensor. */
+  private double loopCurrent(Port own) {
+    Port load = Port.current(0, 0);
+    for (int i = stages.size() - 1; i >= 0; i--) {
+      load = stages.get(i).before(load, nominal);
+    }
+    return (load.v() - own.volts() * load.d()) / (own.ohms() * load.d() + load.r());
   }
 
   /** Slope of the nominal pin voltage, volts per measured unit. */

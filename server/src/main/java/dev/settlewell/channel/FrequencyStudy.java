@@ -78,7 +78,7 @@ final class FrequencyStudy {
     response(nominal);
     rates();
     band();
-    if (timing != null && timing.inputs().complete()) {
+    if (timing != null && timing.rateInputs().complete()) {
       for (Line line : lines) {
         aliases.add(alias(line));
       }
@@ -111,8 +111,8 @@ final class FrequencyStudy {
     if (timing == null) {
       return;
     }
-    if (!timing.inputs().complete()) {
-      figures.add(timing.inputs().figure("result-rate", "Hz"));
+    if (!timing.rateInputs().complete()) {
+      figures.add(timing.rateInputs().figure("result-rate", "Hz"));
       return;
     }
     double rate = timing.sampleRate(model.name(), timing.nominalPeriod()) / model.average();
@@ -244,7 +244,7 @@ final class FrequencyStudy {
   /** Worst averaging gain over a span of frequencies and the tolerance of the rate. */
   private double averaging(double low, double high) {
     int count = model.average();
-    if (count == 1 || timing == null || !timing.inputs().complete()) {
+    if (count == 1 || timing == null || !timing.rateInputs().complete()) {
       return 1;
     }
     int visits = timing.visits(model.name());

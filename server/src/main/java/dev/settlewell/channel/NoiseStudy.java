@@ -53,14 +53,33 @@ final class NoiseStudy {
               operand("T", kelvin, "K"),
               operand("C_hold", Limits.low(hold.get()), "F")));
     }
+    double network = network(kelvin, thermal);
     double converter = converterNoise(adc);
     double amplifiers = amplifiers();
     double jitter = frequency.jitterNoise(model.measures().high());
     // A converter's stated noise holds that of its own hold capacitor.
     double own = Double.isNaN(converter) ? thermal : converter;
-    double white = Math.sqrt(own * own + amplifiers * amplifiers + jitter * jitter);
+    double white = 
+        Math.sqrt(
+            own * own + network * network + amplifiers * amplifiers + jitter * jitter);
     sigma = white / model.lsb();
     report(white);
+  }
+
+  /**
+   * Thermal noise of the resistors before an amplifier, beyond that of the hold capacitor, V rms. Of
+   * a passive path nothing is left: k T / C_hold is all of it.
+   */
+  private double network(double kelvin, double hold) {
+    if (model.lastActive().isEmpty()) {
+      return 0;
+    }
+    AcPath path = frequency.path(model.measures().high(), model.forward().nominal());
+    if (!Double.isFinite(path.ohms())) {
+      return 0;
+    }
+    double all = Noise.thermalAtHold(kelvin, path.ohms(), path.chain(), path.sampler());
+    return Double.isFinite(all) ? Math.sqrt(Math.max(0, all * all - hold * hold)) : 0;
   }
 
   private void report(double white) {

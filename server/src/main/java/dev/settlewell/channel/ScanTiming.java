@@ -16,8 +16,9 @@ import java.util.Map;
 /**
  * When a scan does what: its order, its clock, and how long each acquisition and conversion lasts.
  *
- * @param inputs what the frame lacks (clock, rate, order, conversion); where it is not complete no
- *     time may be asked for
+ * @param rateInputs what the rate lacks; where it is not complete no period may be asked for
+ * @param inputs what the frame lacks (rate, order, clock, conversion); where it is not complete no
+ *     time within the scan may be asked for
  * @param acquisitionInputs which acquisitions are not known
  * @param order names of the channels, in the multiplexer's order
  * @param rate scans per second; null where the scan runs without a pause
@@ -27,6 +28,7 @@ import java.util.Map;
 record ScanTiming(
     Named<Part> scan,
     Named<Part> converter,
+    Inputs rateInputs,
     Inputs inputs,
     Inputs acquisitionInputs,
     List<String> order,
@@ -52,15 +54,21 @@ record ScanTiming(
   static ScanTiming bind(Linked linked, Named<Part> scan, Named<Part> converter) {
     Part part = scan.value().stated().orElseThrow();
     Part adc = converter.value().stated().orElseThrow();
+    Inputs rateInputs = new Inputs();
+    List<String> order = order(part, rateInputs);
+    Slot.Stated<Either> rateStated = rateInputs.need(part.either("rate"));
     Inputs inputs = new Inputs();
     Inputs acquisitionInputs = new Inputs();
-    List<String> order = order(part, inputs);
     Slot.Stated<Toleranced> clockStated = inputs.need(adc.quantity("clock"));
     Slot.Stated<Double> conversion = inputs.need(adc.number("conversion-cycles"));
-    Slot.Stated<Either> rateStated = inputs.need(part.either("rate"));
+    inputs.include(rateInputs);
     Limits clock = clockStated == null ? null : Limits.of(clockStated.value());
     Limits rate =
         rateStated == null ? null : rateStated.value().quantity().map(Limits::of).orElse(null);
+    if (rateStated != null && rate == null) {
+      // It runs without a pause: only the whole of its times says how often.
+      rateInputs = inputs;
+    }
     double[] offered = offered(adc, inputs);
     Map<String, Acquisition> acquisitions = new HashMap<>();
     for (String name : order) {
@@ -77,9 +85,13 @@ record ScanTiming(
         acquisitions.put(name, acquisition(stated.value(), clock, offered));
       }
     }
+    if (rateInputs == inputs) {
+      inputs.include(acquisitionInputs);
+    }
     return new ScanTiming(
         scan,
         converter,
+        rateInputs,
         inputs,
         acquisitionInputs,
         order,

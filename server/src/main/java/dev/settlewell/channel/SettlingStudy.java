@@ -6,8 +6,11 @@ import dev.settlewell.circuit.Visit;
 import dev.settlewell.sheet.Either;
 import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Slot;
+import dev.settlewell.text.Place;
+import dev.settlewell.unit.Dimension;
 import dev.settlewell.unit.Toleranced;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
@@ -18,7 +21,6 @@ import java.util.OptionalDouble;
 final class SettlingStudy {
   private static final List<String[]> NAMES =
       List.of(
-          new String[] {"source-resistance", "Ω"},
           new String[] {"settling-error", "V"},
           new String[] {"settling-error-lsb", "LSB"},
           new String[] {"settling-error-measured", ""},
@@ -35,6 +37,7 @@ final class SettlingStudy {
   private final Map<String, PinRange> pins;
   private final List<String> othersLast;
   private final List<Figure> figures = new ArrayList<>();
+  private final List<Place> typicalOnly = new ArrayList<>();
   private SettlingCircuit circuit;
   private SettlingCircuit.Question question;
   private SettlingCircuit.Worst worst;
@@ -67,7 +70,13 @@ final class SettlingStudy {
         : circuit.extremes(question, worst.point(), x);
   }
 
+  /** Places of converter values that are typical only and that the worst case rests on. */
+  List<Place> typicalOnly() {
+    return typicalOnly;
+  }
+
   void run() {
+    sourceResistance();
     Inputs inputs = new Inputs();
     inputs.include(model.inputs());
     Part adc = model.converterPart();
@@ -91,17 +100,34 @@ final class SettlingStudy {
             Limits.of(switchOhms.value()),
             pin == null ? Limits.exact(0) : Limits.of(pin.value()),
             Limits.of(hold.value()));
-    compute(starts.get(), inputs);
+    for (Slot.Stated<Toleranced> value : Arrays.asList(hold, switchOhms, pin)) {
+      if (value != null && value.value().typicalOnly()) {
+        typicalOnly.add(value.place());
+      }
+    }
+    compute(starts.get());
   }
 
-  private void compute(List<StartRange> starts, Inputs inputs) {
+  /** It needs nothing of the converter: at DC neither the switch nor the capacitors count. */
+  private void sourceResistance() {
+    if (!model.complete()) {
+      figures.add(model.inputs().figure("source-resistance", "Ω"));
+      return;
+    }
+    Limits nothing = Limits.exact(0);
+    double ohms = new SettlingCircuit(model, nothing, nothing, nothing).sourceResistance();
     figures.add(
-        Figure.of(
-            "source-resistance",
-            circuit.sourceResistance(),
-            "Ω",
-            "DC Thevenin resistance at the pin, resistances at their high ends",
-            resistances()));
+        Double.isInfinite(ohms)
+            ? Figure.none("source-resistance", "Ω", "no DC path holds the pin")
+            : Figure.of(
+                "source-resistance",
+                ohms,
+                "Ω",
+                "DC Thevenin resistance at the pin, resistances at their high ends",
+                resistances()));
+  }
+
+  private void compute(List<StartRange> starts) {
     double allowance = allowance();
     figures.add(
         Figure.of(
@@ -214,14 +240,15 @@ final class SettlingStudy {
       figures.add(Figure.none("required-acquisition-cycles", "cycles", why));
       return;
     }
-    double seconds = settled.getAsDouble() + timing.overhead();
+    double seconds = Math.max(settled.getAsDouble() + timing.overhead(), minimum());
     double cycles = ScanTiming.cycles(seconds, timing.clock().high());
     figures.add(
         Figure.of(
             "required-acquisition",
             seconds,
             "s",
-            "last time the settling error crosses the allowance, + acquisition-overhead",
+            "last time the settling error crosses the allowance, + acquisition-overhead;"
+                + " at least minimum-acquisition",
             operand("settle-within", allowance, "V"),
             operand("acquisition-overhead", timing.overhead(), "s")));
     figures.add(
@@ -240,6 +267,20 @@ final class SettlingStudy {
         break;
       }
     }
+  }
+
+  /** What a data sheet demands whatever the source: {@code minimum-acquisition}. */
+  private double minimum() {
+    return model
+        .part()
+        .quantity("minimum-acquisition")
+        .stated()
+        .map(
+            least ->
+                least.unit().dimension() == Dimension.CYCLES
+                    ? least.value() / timing.clock().high()
+                    : least.value())
+        .orElse(0.0);
   }
 
   private void timeConstants(boolean known) {
