@@ -39,8 +39,7 @@ final class TwofoldMatrix {
     for (int at = row * size; at < (row + 1) * size; at++) {
       double quotient = high[at] / divisor;
       double product = quotient * divisor;
-      double remainder =
-          (high[at] - product - productError(quotient, divisor, product) + low[at]) / divisor;
+      double remainder = (high[at] - product - productError(quotient, divisor) + low[at]) / divisor;
       set(at, quotient, remainder);
     }
   }
@@ -56,7 +55,7 @@ final class TwofoldMatrix {
     TwofoldMatrix scaled = new TwofoldMatrix(size);
     for (int at = 0; at < high.length; at++) {
       double product = high[at] * factor;
-      scaled.set(at, product, productError(high[at], factor, product) + low[at] * factor);
+      scaled.set(at, product, productError(high[at], factor) + low[at] * factor);
     }
     return scaled;
   }
@@ -71,22 +70,28 @@ final class TwofoldMatrix {
   }
 
   TwofoldMatrix times(TwofoldMatrix other) {
+    double[] leading = leading(high);
+    double[] otherLeading = leading(other.high);
     TwofoldMatrix product = new TwofoldMatrix(size);
     for (int i = 0; i < size; i++) {
-      for (int k = 0; k < size; k++) {
-        for (int j = 0; j < size; j++) {
-          product.accumulateProduct(i * size + j, this, i * size + k, other, k * size + j);
+      for (int j = 0; j < size; j++) {
+        double sum = 0;
+        double rest = 0;
+        for (int k = 0; k < size; k++) {
+          int left = i * size + k;
+          int right = k * size + j;
+          double term = high[left] * other.high[right];
+          double next = sum + term;
+          double part = next - sum;
+          rest += (sum - (next - part)) + (term - part);
+          rest += productError(high[left], leading[left], other.high[right], otherLeading[right]);
+          rest += high[left] * other.low[right] + low[left] * other.high[right];
+          sum = next;
         }
+        product.set(i * size + j, sum, rest);
       }
     }
     return product;
-  }
-
-  private void accumulateProduct(int at, TwofoldMatrix a, int i, TwofoldMatrix b, int j) {
-    double product = a.high[i] * b.high[j];
-    double rest =
-        productError(a.high[i], b.high[j], product) + a.high[i] * b.low[j] + a.low[i] * b.high[j];
-    accumulate(at, product, rest);
   }
 
   private void accumulate(int at, double value, double rest) {
@@ -102,14 +107,26 @@ final class TwofoldMatrix {
     low[at] = rest - (high[at] - value);
   }
 
-  private static double productError(double a, double b, double product) {
-    double aHigh = leading(a);
-    double bHigh = leading(b);
-    double aLow = a - aHigh;
-    double bLow = b - bHigh;
-    return ((aHigh * bHigh - product) + aHigh * bLow + aLow * bHigh) + aLow * bLow;
+  /** a b less its rounded value. */
+  private static double productError(double a, double b) {
+    return productError(a, leading(a), b, leading(b));
   }
 
+  private static double productError(double a, double aLeading, double b, double bLeading) {
+    double aRest = a - aLeading;
+    double bRest = b - bLeading;
+    return ((aLeading * bLeading - a * b) + aLeading * bRest + aRest * bLeading) + aRest * bRest;
+  }
+
+  private static double[] leading(double[] values) {
+    double[] leading = new double[values.length];
+    for (int at = 0; at < values.length; at++) {
+      leading[at] = leading(values[at]);
+    }
+    return leading;
+  }
+
+  /** The upper half of the digits. */
   private static double leading(double a) {
     double scaled = SPLITTER * a;
     return scaled - (scaled - a);
