@@ -122,8 +122,11 @@ public final class SourceText {
     int offset = from;
     while (offset < to) {
       int codePoint = content.codePointAt(offset);
-      column += width(codePoint, encoding);
       offset += Character.charCount(codePoint);
+      if (offset > to) {
+        break; // between two surrogates: the character's start
+      }
+      column += width(codePoint, encoding);
     }
     return column;
   }

@@ -111,7 +111,7 @@ public final class Engineering {
     int exponent = value.precision() - value.scale() - 1;
     int index = NO_PREFIX + Math.floorDiv(exponent, 3);
     if (index < 0 || index >= PREFIXES.size()) {
-      return number(value) + " " + unit;
+      return withExponent(value, exponent) + " " + unit;
     }
     int power = 3 * (index - NO_PREFIX);
     return value.movePointLeft(power).toPlainString() + " " + PREFIXES.get(index) + unit;
@@ -123,6 +123,10 @@ public final class Engineering {
     if (-5 < exponent && exponent < 15) {
       return value.signum() == 0 ? "0" : value.toPlainString();
     }
+    return withExponent(value, exponent);
+  }
+
+  private static String withExponent(BigDecimal value, int exponent) {
     return value.movePointLeft(exponent).toPlainString() + "e" + exponent;
   }
 }

@@ -1,9 +1,11 @@
 package dev.settlewell.unit;
 
-import java.util.ArrayList;
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 
 /**
  * The units of the format: symbols, prefixes, composites such as {@code ppm/K}.
@@ -57,9 +59,20 @@ public final class UnitTable {
           new Symbol("K", "K", Dimension.TEMPERATURE, ALL),
           new Symbol("\u212A", "K", Dimension.TEMPERATURE, ALL));
 
-  private static final Map<String, Integer> PREFIXES =
-      Map.of(
-          "p", -12, "n", -9, "u", -6, "µ", -6, "μ", -6, "m", -3, "k", 3, "M", 6, "G", 9);
+  /** A decimal prefix, in one of its spellings. */
+  private record Prefix(String spelling, String canonical, int power) {}
+
+  private static final List<Prefix> PREFIXES =
+      List.of(
+          new Prefix("p", "p", -12),
+          new Prefix("n", "n", -9),
+          new Prefix("µ", "µ", -6),
+          new Prefix("μ", "µ", -6),
+          new Prefix("u", "µ", -6),
+          new Prefix("m", "m", -3),
+          new Prefix("k", "k", 3),
+          new Prefix("M", "M", 6),
+          new Prefix("G", "G", 9));
 
   private static final List<Composite> COMPOSITES =
       List.of(
@@ -74,6 +87,9 @@ public final class UnitTable {
   static final Unit CELSIUS = new Unit("°C", "°C", Dimension.TEMPERATURE, 1);
   static final Unit OHM = new Unit("Ω", "Ω", Dimension.RESISTANCE, 1);
   static final Unit FARAD = new Unit("F", "F", Dimension.CAPACITANCE, 1);
+
+  /** Bare units, symbols and prefixed symbols, by their spelling. */
+  private static final Map<String, Parsed> SIMPLE = allSimple();
 
   private UnitTable() {}
 
@@ -162,17 +178,9 @@ public final class UnitTable {
     };
   }
 
-  /** Every spelling without a prefix and every prefix, for those who search for what was meant. */
-  static List<String> spellings() {
-    List<String> all = new ArrayList<>();
-    for (Symbol bare : BARE) {
-      all.add(bare.spelling());
-    }
-    for (Symbol symbol : SYMBOLS) {
-      all.add(symbol.spelling());
-      symbol.prefixes().chars().forEach(p -> all.add((char) p + symbol.spelling()));
-    }
-    return all;
+  /** Every spelling of a unit that is no composite. */
+  static Set<String> spellings() {
+    return SIMPLE.keySet();
   }
 
   private record Parsed(Unit unit, String canonical) {}
@@ -184,24 +192,24 @@ public final class UnitTable {
   }
 
   private static Optional<Parsed> simple(String word) {
+    return Optional.ofNullable(SIMPLE.get(word));
+  }
+
+  private static Map<String, Parsed> allSimple() {
+    Map<String, Parsed> all = new LinkedHashMap<>();
     for (Symbol bare : BARE) {
-      if (bare.spelling().equals(word)) {
-        return Optional.of(parsed(word, "", 0, bare));
-      }
+      all.put(bare.spelling(), parsed(bare.spelling(), "", 0, bare));
     }
     for (Symbol symbol : SYMBOLS) {
-      if (symbol.spelling().equals(word)) {
-        return Optional.of(parsed(word, "", 0, symbol));
-      }
-      if (word.length() == symbol.spelling().length() + 1 && word.endsWith(symbol.spelling())) {
-        String prefix = micro(word.substring(0, 1));
-        Integer power = PREFIXES.get(prefix);
-        if (power != null && symbol.prefixes().contains(prefix)) {
-          return Optional.of(parsed(word, prefix, power, symbol));
+      all.put(symbol.spelling(), parsed(symbol.spelling(), "", 0, symbol));
+      for (Prefix prefix : PREFIXES) {
+        if (symbol.prefixes().contains(prefix.canonical())) {
+          String word = prefix.spelling() + symbol.spelling();
+          all.put(word, parsed(word, prefix.canonical(), prefix.power(), symbol));
         }
       }
     }
-    return Optional.empty();
+    return Collections.unmodifiableMap(all);
   }
 
   private static Parsed parsed(String word, String prefix, int power, Symbol symbol) {
@@ -259,10 +267,6 @@ public final class UnitTable {
             .findFirst()
             .orElse(Dimension.OTHER);
     return Optional.of(new Parsed(new Unit(word, symbol, dimension, scale), canonical));
-  }
-
-  private static String micro(String prefix) {
-    return prefix.equals("u") || prefix.equals("μ") ? "µ" : prefix;
   }
 
   private static double scale(int power) {

@@ -11,7 +11,7 @@ import org.junit.jupiter.api.Test;
 
 /** Properties that hold for every value; each failure names the seed of its case. */
 class RoundTripTest {
-  private static final int CASES = 5_000;
+  private static final int CASES = 2_000;
   private static final Expected ANY = Expected.of();
 
   private static final List<String> SYMBOLS =
