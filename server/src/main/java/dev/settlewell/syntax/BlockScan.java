@@ -287,7 +287,7 @@ final class BlockScan {
   private void child(Row row, Level parent) {
     int at = row.content();
     boolean item = isItem(at) || tightItem(at, row.end());
-    if (!item && isText(row) && !keysFollow(row)) {
+    if (!item && isText(row) && (opens(at) || !keysFollow(row))) {
       parent.last = value(at, row, parent, "");
       return;
     }
@@ -299,6 +299,10 @@ final class BlockScan {
     } else {
       entry(row, level);
     }
+  }
+
+  private boolean opens(int at) {
+    return "[{\"'".indexOf(mending.draft.at(at)) >= 0;
   }
 
   /** True where a line that looks like a text has keys beside or below it: its colon is missing. */
@@ -359,8 +363,7 @@ final class BlockScan {
   private void entry(Row row, Level level) {
     int at = row.content();
     char first = mending.draft.at(at);
-    boolean flowRoot = levels.size() == 1 && level.last == Last.OPEN && (first == '{' || first == '[');
-    if (flowRoot) {
+    if (!started && (first == '{' || first == '[') && holdsAll(at)) {
       level.last = value(at, row, new Level(false, -1, -1, null), "");
     } else if (first == '?' && mending.gap(at + 1)) {
       dropBlock(row, "`?` begins a key that is no word: write `KEY: VALUE`");
@@ -368,9 +371,25 @@ final class BlockScan {
       dropBlock(row, "a key is missing before this colon");
     } else if (hasKey(at, row.end())) {
       entry(row, level, at);
+    } else if ("[]{}".indexOf(first) >= 0 && hasKey(mending.skipBlanks(at + 1), row.end())) {
+      strayBracket(row, level);
     } else {
       noColon(row, level);
     }
+  }
+
+  /** A bracket before a key: the key is read without it. */
+  private void strayBracket(Row row, Level level) {
+    int at = row.content();
+    int key = mending.skipBlanks(at + 1);
+    char c = mending.draft.at(at);
+    mending.syntax(
+        at,
+        at + 1,
+        "`" + c + "` does not belong before a key: remove it",
+        mending.guess("Remove `" + c + "`", mending.edit(at, key, "")));
+    mending.draft.drop(at, key);
+    entry(row, level, key);
   }
 
   private void entry(Row row, Level level, int at) {
@@ -383,6 +402,21 @@ final class BlockScan {
     String key = mending.slice(at, mending.trimmed(at, colon));
     int value = mending.skipBlanks(colon + 1);
     level.last = value(value, row, level, key);
+  }
+
+  /** True where the bracket that opens the text is closed at its end: the sheet is one mapping. */
+  private boolean holdsAll(int at) {
+    int end = mending.text.length();
+    int depth = 0;
+    for (int i = at; i < end; i++) {
+      char c = mending.draft.at(i);
+      depth += c == '[' || c == '{' ? 1 : Quotes.closer(c) ? -1 : 0;
+      if (depth == 0) {
+        int next = mending.nextContent(mending.text.lineAt(i));
+        return next < 0;
+      }
+    }
+    return false;
   }
 
   /**
@@ -488,8 +522,9 @@ final class BlockScan {
 
   // Values.
 
-  private Last value(int at, Row row, Level level, String key) {
+  private Last value(int from, Row row, Level level, String key) {
     int end = row.end();
+    int at = mending.textKeys.contains(key) ? from : behindProperties(from, end);
     if (at >= end || mending.comment(at)) {
       return Last.OPEN;
     }
@@ -511,16 +546,6 @@ final class BlockScan {
       return Last.CLOSED;
     }
     int text = mending.beforeComment(at, end);
-    if (c == '!') {
-      return value(mending.skipBlanks(starts.tag(at)), row, level, key);
-    }
-    if (c == '&') {
-      int gap = at;
-      while (!mending.gap(gap)) {
-        gap++;
-      }
-      return value(mending.skipBlanks(gap), row, level, key);
-    }
     if (c == '-' && mending.blank(at + 1)) {
       starts.dash(at, text);
     } else if (Starts.cannotBegin(mending, at, text)) {
@@ -534,10 +559,27 @@ final class BlockScan {
     return Last.PLAIN;
   }
 
+  /** Behind the tags, which are told, and the anchors before a value. */
+  private int behindProperties(int from, int end) {
+    int at = from;
+    while (at < end && (mending.draft.at(at) == '!' || mending.draft.at(at) == '&')) {
+      int next = at;
+      if (mending.draft.at(at) == '!') {
+        next = starts.tag(at);
+      }
+      while (!mending.gap(next)) {
+        next++;
+      }
+      at = mending.skipBlanks(next);
+    }
+    return at;
+  }
+
   /** {@code sensor: thermistor: …}: the inner key is read as if it stood on the next line. */
   private Last secondColon(int at, int end, Row row, Level level) {
     int colon = starts.secondColon(at, end);
-    if (!word(at, colon) || !Character.isLetter(mending.draft.at(at)) || level.list) {
+    boolean key = word(at, colon) && Character.isLetter(mending.draft.at(at)) && !level.list;
+    if (!key || levels.size() > TreeBuilder.MAX_DEPTH) {
       mending.syntax(
           at,
           end,
@@ -565,7 +607,7 @@ final class BlockScan {
 
   private void garbage(int close, int end) {
     int at = mending.skipBlanks(close);
-    if (at >= end || at > close && mending.draft.at(at) == '#') {
+    if (at >= end || mending.draft.at(at) == '#') {
       return;
     }
     int to = mending.beforeComment(at, end);
@@ -590,13 +632,19 @@ final class BlockScan {
     return i == end || mending.gap(i) && mending.comment(mending.skipBlanks(i));
   }
 
+  /** A block text goes on as deep as its first line, or as deep as its header says. */
   private void skipBlock(int at, Level level) {
-    int next = number + 1;
+    int indent = 0;
+    for (int i = at + 1; i <= at + 2; i++) {
+      char digit = mending.draft.at(i);
+      indent = digit >= '1' && digit <= '9' ? level.indent + digit - '0' : indent;
+    }
     int last = number;
-    for (; next < mending.text.lineCount(); next++) {
+    for (int next = number + 1; next < mending.text.lineCount(); next++) {
       Row row = mending.row(next);
       if (row.content() < row.end()) {
-        if (row.indent() <= level.indent) {
+        indent = indent == 0 ? Math.max(row.indent(), level.indent + 1) : indent;
+        if (row.indent() < indent) {
           break;
         }
         last = next;

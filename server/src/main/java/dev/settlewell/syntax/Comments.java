@@ -36,7 +36,8 @@ final class Comments {
   }
 
   private static boolean startsComment(String content, int offset) {
-    return offset == 0 || content.charAt(offset - 1) <= ' ' || content.charAt(offset - 1) == '\uFEFF';
+    char before = offset == 0 ? ' ' : content.charAt(offset - 1);
+    return before <= ' ' || "[]{},\"'\uFEFF".indexOf(before) >= 0;
   }
 
   private static boolean startsLine(String content, int lineStart, int offset) {

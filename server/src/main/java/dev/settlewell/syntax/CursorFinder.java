@@ -65,7 +65,9 @@ final class CursorFinder {
       return value instanceof Node.Mapping m ? inBraces(m, path) : inBrackets(value, path);
     }
     boolean covered = value.place().span().touches(offset);
-    boolean besideIt = text.lineAt(offset) == text.lineAt(value.place().end()) && !covered;
+    boolean before = keyLine && offset < value.place().start();
+    boolean behind = text.lineAt(offset) == text.lineAt(value.place().end());
+    boolean besideIt = !covered && (before || behind);
     if (!covered && !besideIt) {
       return Optional.empty();
     }
@@ -193,7 +195,8 @@ final class CursorFinder {
   private boolean mayBeKey(Node.Scalar scalar, boolean valueOnKeyLine) {
     int line = text.lineAt(offset);
     boolean alone = !valueOnKeyLine || line > text.lineAt(scalar.place().start());
-    boolean plain = scalar.inset() == 0 && "|>".indexOf(content.charAt(scalar.place().start())) < 0;
+    int start = scalar.place().start();
+    boolean plain = scalar.inset() == 0 && (start == content.length() || "|>".indexOf(content.charAt(start)) < 0);
     return alone && plain && isWord(text.slice(text.line(line)).strip());
   }
 

@@ -1,6 +1,7 @@
 package dev.settlewell.syntax;
 
 import dev.settlewell.syntax.Mending.Row;
+import dev.settlewell.text.Span;
 import java.util.ArrayDeque;
 import java.util.Deque;
 
@@ -26,6 +27,9 @@ final class FlowScan {
 
     /** Nothing of the present key or value has been read yet. */
     boolean fresh = true;
+
+    /** It has, and it can go on: a plain text may, over lines too. */
+    boolean plain;
 
     int valueStart;
 
@@ -56,6 +60,12 @@ final class FlowScan {
 
   /** Behind the collection that opens here. */
   int end(int start) {
+    int end = scan(start);
+    mending.wholes.add(new Span(start, Math.max(start, end)));
+    return end;
+  }
+
+  private int scan(int start) {
     Row row = mending.row(mending.text.lineAt(start));
     number = row.number();
     lineEnd = row.end();
@@ -80,7 +90,8 @@ final class FlowScan {
     }
     Row row = mending.row(next);
     char first = mending.draft.at(row.content());
-    if (row.indent() <= base && !(row.indent() == base && Quotes.closer(first))) {
+    boolean outside = row.indent() <= base && !(row.indent() == base && Quotes.closer(first));
+    if (outside || keyOfBlock(row)) {
       return false;
     }
     number = next;
@@ -89,15 +100,25 @@ final class FlowScan {
     return true;
   }
 
+  /** A line that begins with a key where none may stand: the bracket was left open above it. */
+  private boolean keyOfBlock(Row row) {
+    int colon = row.content();
+    while (Mending.wordChar(mending.draft.at(colon))) {
+      colon++;
+    }
+    boolean key = colon > row.content() && mending.draft.at(colon) == ':' && mending.gap(colon + 1);
+    return key && !open.isEmpty() && (!open.peek().fresh || open.peek().keySeen);
+  }
+
   private void step() {
     char c = mending.draft.at(at);
     if (mending.blank(at)) {
       at++;
-    } else if (mending.comment(at)) {
+    } else if (c == '#') {
       at = lineEnd;
     } else if (c == '[' || c == '{') {
       if (!open.isEmpty()) {
-        open.peek().fresh = false;
+        begin(false);
       }
       open.push(new Open(c, at));
       advance(at + 1);
@@ -169,15 +190,33 @@ final class FlowScan {
     advance(end);
   }
 
+  /** Something begins; where something stands before it already, the comma between is missing. */
+  private void begin(boolean plain) {
+    Open top = open.peek();
+    if (!top.fresh) {
+      mending.syntax(
+          at,
+          at + 1,
+          "a comma is missing before this",
+          mending.guess("Put a comma before it", mending.edit(last, last, ",")));
+      mending.draft.insert(last, ",");
+      top.nextItem();
+    }
+    top.fresh = false;
+    top.plain = plain;
+  }
+
   private void scalar(char c) {
     Open top = open.peek();
-    boolean fresh = top.fresh;
-    top.fresh = false;
-    if (!fresh) {
+    boolean quote = c == '"' || c == '\'';
+    if (!top.fresh && top.plain && !quote) {
       advance(plainEnd(at + 1));
-    } else if (top.keySeen && mending.textKeys.contains(top.key)) {
+      return;
+    }
+    begin(!quote);
+    if (top.keySeen && mending.textKeys.contains(top.key)) {
       text(c);
-    } else if (c == '"' || c == '\'') {
+    } else if (quote) {
       int start = at;
       int end = quotes.end(at, base, open.size());
       remember(top, start + 1, Math.max(start + 1, end - 1));

@@ -49,6 +49,9 @@ final class LineCursor {
   }
 
   Cursor find() {
+    if (tree.root().flow()) {
+      return new Cursor.Nowhere();
+    }
     open(tree.root(), List.of());
     boolean blank = start >= end;
     int from = blank ? Math.max(lineStart, offset) : start;
@@ -139,7 +142,7 @@ final class LineCursor {
 
   /** Adds the blocks that are open at the line's start, outermost first. */
   private void open(Node node, List<String> path) {
-    if (CursorFinder.isAlias(node, text.content())) {
+    if (!path.isEmpty() && CursorFinder.isAlias(node, text.content())) {
       return;
     }
     if (node instanceof Node.Mapping mapping && !mapping.flow()) {

@@ -27,6 +27,9 @@ final class Mending {
   /** Quoted and block scalars: tabs in them are meant. */
   final List<Span> verbatim = new ArrayList<>();
 
+  /** Lists, mappings and quoted texts that can only be taken out as a whole. */
+  final List<Span> wholes = new ArrayList<>();
+
   private final int[] indents;
 
   Mending(SourceText text, Set<String> textKeys) {

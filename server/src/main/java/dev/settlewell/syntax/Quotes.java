@@ -48,6 +48,7 @@ final class Quotes {
       return close(open, row, closers);
     }
     mending.verbatim.add(new Span(open, end));
+    mending.wholes.add(new Span(open, end));
     return end;
   }
 

@@ -36,6 +36,7 @@ final class Reader {
       return new SyntaxTree(text, emptyRoot(), mending.problems, List.of());
     }
     mend();
+    Recovery recovery = new Recovery(mending);
     TreeBuilder builder = null;
     Optional<Node> root = Optional.empty();
     long work = 0;
@@ -46,7 +47,7 @@ final class Reader {
       root = builder.build();
       Optional<Events.Failure> failure = builder.failure();
       if (failure.isEmpty()
-          || !takeOut(rendered.offset(failure.get().index()), failure.get().message())) {
+          || !recovery.takeOut(rendered.offset(failure.get().index()), failure.get().message())) {
         break;
       }
     }
@@ -78,41 +79,6 @@ final class Reader {
             .limit(MAX_PROBLEMS)
             .toList();
     return new SyntaxTree(text, mapping, problems, Comments.of(text, builder.scalars()));
-  }
-
-  /** Takes the value the parser failed on out of the draft, else its line, else the line above. */
-  private boolean takeOut(int offset, String complaint) {
-    int number = text.lineAt(offset);
-    while (number > 0 && isEmpty(number)) {
-      number--;
-    }
-    if (isEmpty(number)) {
-      return false;
-    }
-    Mending.Row row = mending.row(number);
-    int start = row.content();
-    int end = Math.max(start, row.end());
-    int colon = text.slice(new Span(start, end)).indexOf(": ");
-    int value = mending.skipBlanks(start + colon + 1);
-    boolean valueFails = colon > 0 && value < end && !mending.draft.isBlank(value, end);
-    if (mending.problems.stream().noneMatch(p -> onLine(p, row))) {
-      mending.syntax(valueFails ? value : start, end, Messages.of(complaint));
-    }
-    if (valueFails) {
-      mending.breakOff(value, end);
-    } else {
-      mending.draft.blank(row.start(), end);
-    }
-    return true;
-  }
-
-  private static boolean onLine(Problem problem, Mending.Row row) {
-    return problem.place().start() >= row.start() && problem.place().start() <= row.end();
-  }
-
-  private boolean isEmpty(int number) {
-    Mending.Row row = mending.row(number);
-    return mending.empty(row) || mending.draft.isBlank(row.start(), row.end());
   }
 
   private Node.Mapping emptyRoot() {

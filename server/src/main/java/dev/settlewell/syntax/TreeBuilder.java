@@ -221,15 +221,19 @@ final class TreeBuilder {
 
   private Node absentOrBroken(int offset) {
     Map.Entry<Integer, Span> next = broken.ceilingEntry(offset);
-    if (next != null && onlyBlanks(offset, next.getKey())) {
+    if (next != null && nothingBetween(offset, next.getKey())) {
       return new Node.Broken(source.place(next.getValue()));
     }
     return new Node.Absent(at(offset));
   }
 
-  private boolean onlyBlanks(int start, int end) {
+  /** True where only blanks, line breaks and comments stand. */
+  private boolean nothingBetween(int start, int end) {
+    boolean comment = false;
     for (int i = start; i < end; i++) {
-      if (source.content().charAt(i) != ' ' && source.content().charAt(i) != '\t') {
+      char c = source.content().charAt(i);
+      comment = c == '#' || comment && c != '\n' && c != '\r';
+      if (c > ' ' && !comment) {
         return false;
       }
     }

@@ -59,6 +59,9 @@ class SyntaxSlipsTest {
         slip("a: ⟦\"\\q\"⟧~b: 2", "{a: !, b: 2}", "escape", null),
         slip("a: [1, ⟦,⟧ 2]~b: 2", "{a: [1, 2], b: 2}", "comma", "a: [1,  2]~b: 2"),
         slip("a: {⟦,⟧ c: 2, d: , }~b: 2", "{a: {c: 2, d: ?}, b: 2}", "comma", "a: { c: 2, d: , }~b: 2"),
+        slip("a: [1 V, \"x\" ⟦y⟧]", "{a: [1 V, x, y]}", "comma is missing", "a: [1 V, \"x\", y]"),
+        slip("a: {b: [1] ⟦c⟧: 2}", "{a: {b: [1], c: 2}}", "comma is missing", "a: {b: [1], c: 2}"),
+        slip("⟦{⟧a: 1~b: 2", "{a: 1, b: 2}", "before a key", "a: 1~b: 2"),
         // Indentation.
         slip("a:~  b: 1~    ⟦c⟧: 2~  d: 3", "{a: {b: 1, c: 2, d: 3}}", "indented by 4",
             "a:~  b: 1~  c: 2~  d: 3"),
@@ -108,7 +111,7 @@ class SyntaxSlipsTest {
         slip("a: ⟦!x⟧ 1~b: 1", "{a: 1, b: 1}", "tag", "a: 1~b: 1"),
         slip("a: &p~  c: 1~b:~  ⟦<<⟧: *p~  d: 1", "{a: {c: 1}, b: {d: 1}}", "merge", null),
         slip("⟦? a⟧~b: 1", "{b: 1}", "`?`", null),
-        slip("a: 1~⟦[x]: 2⟧~b: 1", "{a: 1, b: 1}", "no key", null),
+        slip("a: 1~⟦[⟧x: 2~b: 1", "{a: 1, x: 2, b: 1}", "before a key", "a: 1~x: 2~b: 1"),
         slip("a: 1~⟦---⟧~b: 2", "{a: 1, b: 2}", "another document", "a: 1~b: 2"),
         slip("a: ⟦*gone⟧~b: 1", "{a: !, b: 1}", "&gone", null),
         slip("a: &p~  c: ⟦*p⟧", "{a: {c: !}}", "&p", null),
