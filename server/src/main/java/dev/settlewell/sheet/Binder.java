@@ -174,7 +174,8 @@ final class Binder {
     return new Slot.Stated<>(part, keyPlace, sequence.place(), "", pointer);
   }
 
-  private Part mapping(
+  /** A mapping of a known kind, bound; what a whole sheet is, and every part of it. */
+  Part mapping(
       Kind kind, Node.Mapping mapping, Place keyPlace, String pointer, Scope outer) {
     Entries entries = Entries.of(mapping, report);
     slips.unknownKeys(kind, entries);
