@@ -93,7 +93,7 @@ final class AcquisitionSearch {
 
   /** Empty where the longest time does not suffice. */
   OptionalDouble find() {
-    if (!(worst(longest) <= allowance)) {
+    if (!(longest >= 0 && worst(longest) <= allowance)) {
       return OptionalDouble.empty();
     }
     startAt(longest);

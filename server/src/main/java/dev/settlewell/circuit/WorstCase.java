@@ -10,14 +10,17 @@ import org.apache.commons.math3.optim.univariate.UnivariateObjectiveFunction;
 /**
  * Bounded local search for the worst case over a box of tolerances.
  *
- * <p>A coarse grid (the two ends of each parameter, and the middle of those that are searched),
- * then, from its best point, two rounds of one-dimensional searches (R. P. Brent, Algorithms for
- * Minimization without Derivatives, 1973, chapter 5) along one parameter after the other. The
- * search is local: a summit that rises between the grid's points and apart from the one it climbs
- * stays unseen.
+ * <p>A coarse grid (the two ends of each parameter, and points between them of those that are
+ * searched), then, from its best point, two rounds of one-dimensional searches (R. P. Brent,
+ * Algorithms for Minimization without Derivatives, 1973, chapter 5) along one parameter after the
+ * other. The search is local: a summit that rises between the grid's points and apart from the one
+ * it climbs stays unseen.
  */
 public final class WorstCase {
   private static final int ROUNDS = 2;
+
+  /** Points of the grid along a searched parameter, the finest first. */
+  private static final int[] LEVELS = {5, 3, 2};
 
   /** Where a one-dimensional search stops, as part of the box's side. */
   private static final double CLOSE = 1e-3;
@@ -26,6 +29,10 @@ public final class WorstCase {
   private final double[] low;
   private final double[] high;
   private final boolean[] corner;
+
+  /** How far a one-dimensional search goes either way, as part of the box's side. */
+  private double reach = 0.5;
+
   private int left;
   private double[] best;
   private double value = Double.NEGATIVE_INFINITY;
@@ -73,18 +80,18 @@ public final class WorstCase {
     return !(high[i] > low[i]);
   }
 
-  /** Ends and middles while they fit half the calls; else ends alone; else one after the other. */
+  /** As fine a grid as fits half the calls; where none does, one parameter after the other. */
   private void grid() {
-    int half = left / 2;
-    boolean middles = points(true) <= half;
-    boolean ends = middles || points(false) <= half;
     double[] start = new double[low.length];
     for (int i = 0; i < start.length; i++) {
-      start[i] = corner[i] || fixed(i) ? high[i] : middle(i);
+      start[i] = corner[i] ? high[i] : at(i, 0.5);
     }
-    if (ends) {
-      grid(start, 0, middles);
-      return;
+    for (int levels : LEVELS) {
+      if (points(levels) <= left / 2) {
+        reach = Math.min(reach, 1.0 / (levels - 1));
+        grid(start, 0, levels);
+        return;
+      }
     }
     evaluate(start);
     for (int i = 0; i < low.length && left > 0; i++) {
@@ -92,34 +99,29 @@ public final class WorstCase {
     }
   }
 
-  private double points(boolean middles) {
+  private double points(int levels) {
     double points = 1;
     for (int i = 0; i < low.length; i++) {
-      points *= fixed(i) ? 1 : corner[i] || !middles ? 2 : 3;
+      points *= fixed(i) ? 1 : corner[i] ? 2 : levels;
     }
     return points;
   }
 
-  private void grid(double[] point, int parameter, boolean middles) {
+  private void grid(double[] point, int parameter, int levels) {
     if (parameter == low.length) {
       evaluate(point.clone());
       return;
     }
-    point[parameter] = high[parameter];
-    grid(point, parameter + 1, middles);
-    if (fixed(parameter)) {
-      return;
-    }
-    point[parameter] = low[parameter];
-    grid(point, parameter + 1, middles);
-    if (middles && !corner[parameter]) {
-      point[parameter] = middle(parameter);
-      grid(point, parameter + 1, middles);
+    int last = fixed(parameter) ? 0 : corner[parameter] ? 1 : levels - 1;
+    for (int level = 0; level <= last; level++) {
+      point[parameter] = at(parameter, last == 0 ? 1 : (double) level / last);
+      grid(point, parameter + 1, levels);
     }
   }
 
-  private double middle(int i) {
-    return low[i] + (high[i] - low[i]) / 2;
+  /** The value of a parameter at a part of its side, the ends exactly. */
+  private double at(int i, double part) {
+    return part >= 1 ? high[i] : low[i] + part * (high[i] - low[i]);
   }
 
   /** One search along each parameter, sharing the calls that are left. */
@@ -157,18 +159,18 @@ public final class WorstCase {
       return;
     }
     double[] from = best;
-    double side = high[i] - low[i];
-    double at = (from[i] - low[i]) / side;
-    double from0 = Math.max(0, at - 0.5);
-    double to1 = Math.min(1, at + 0.5);
-    double start = Math.min(to1, Math.max(from0, at <= 0 ? 0.19 : at >= 1 ? 0.81 : at));
+    double here = Math.min(1, Math.max(0, (from[i] - low[i]) / (high[i] - low[i])));
+    double least = Math.max(0, here - reach);
+    double greatest = Math.min(1, here + reach);
+    boolean inside = here > least && here < greatest;
     int leave = left - calls;
     new BrentOptimizer(1e-15, CLOSE, (iteration, previous, current) -> left <= leave)
         .optimize(
-            new UnivariateObjectiveFunction(
-                part -> evaluate(with(from, i, Math.min(high[i], low[i] + part * side)))),
+            new UnivariateObjectiveFunction(part -> evaluate(with(from, i, at(i, part)))),
             GoalType.MAXIMIZE,
-            new SearchInterval(from0, to1, start),
+            inside
+                ? new SearchInterval(least, greatest, here)
+                : new SearchInterval(least, greatest),
             new MaxEval(Integer.MAX_VALUE));
   }
 
@@ -181,7 +183,7 @@ public final class WorstCase {
   private double evaluate(double[] point) {
     left--;
     double result = f.applyAsDouble(point);
-    if (best == null || result > value) {
+    if (best == null || result > value || Double.isNaN(value)) {
       best = point;
       value = result;
     }

@@ -376,7 +376,7 @@ class SettlingTest {
   /** Random circuits: nothing on a fine grid after the answer exceeds the allowance. */
   @Test
   void nothingAfterTheRequiredAcquisitionExceedsTheAllowance() {
-    for (long seed = 1; seed <= 60; seed++) {
+    for (long seed = 1; seed <= 40; seed++) {
       RandomCircuits random = new RandomCircuits(seed);
       RandomCircuits.Sampled circuit = seed % 4 == 0 ? random.amplified() : random.passive();
       double longest = circuit.period() * 0.9;
@@ -425,6 +425,21 @@ class SettlingTest {
             allowance,
             longest)
         .orElseThrow();
+  }
+
+  /** Less than no time is left, e.g. after slewing. */
+  @Test
+  void noAcquisitionSufficesWhereNoTimeIsLeft() {
+    assertThat(
+            Settling.requiredAcquisition(
+                reservoir(1e3, 0),
+                SAMPLER,
+                List.of(new Visit(0, 1e-6)),
+                1e-3,
+                new double[] {0},
+                1e-3,
+                -1e-6))
+        .isEmpty();
   }
 
   /** The charge a reservoir shares cannot be waited away before the next visit. */

@@ -57,12 +57,12 @@ class WorstCaseTest {
   /** A full grid of the box: what the search must not fall short of. */
   private static double bruteForce(Box box) {
     double worst = 0;
-    for (int i = 0; i <= 24; i++) {
-      for (int j = 0; j <= 24; j++) {
+    for (int i = 0; i <= 16; i++) {
+      for (int j = 0; j <= 16; j++) {
         for (int corner = 0; corner < 4; corner++) {
           double[] point = {
-            between(box, 0, i / 24.0),
-            between(box, 1, j / 24.0),
+            between(box, 0, i / 16.0),
+            between(box, 1, j / 16.0),
             between(box, 2, corner & 1),
             between(box, 3, corner >> 1)
           };
@@ -154,5 +154,33 @@ class WorstCaseTest {
         WorstCase.maximise(
             point -> point[0], new double[] {3}, new double[] {3}, new boolean[] {false}, 60);
     assertThat(found.value()).isEqualTo(3);
+  }
+
+  /** From either rail a potentiometer has two summits, at 1/3 and 2/3 of its travel. */
+  @Test
+  void findsTheHigherOfTwoSummits() {
+    double upperRail = 0.9;
+    WorstCase.Result found =
+        WorstCase.maximise(
+            p -> p[0] * (1 - p[0]) * Math.max(p[0], upperRail - p[0]) * p[1],
+            new double[] {0, 1},
+            new double[] {1, 2},
+            new boolean[] {false, true},
+            EVALUATIONS);
+    assertThat(found.point()[0]).isCloseTo(2 / 3.0, within(0.01));
+    assertThat(found.value()).isCloseTo(2 * 4 / 27.0, within(1e-6));
+  }
+
+  /** A value that cannot be computed somewhere does not hide the others. */
+  @Test
+  void passesOverWhatIsNotANumber() {
+    WorstCase.Result found =
+        WorstCase.maximise(
+            p -> p[0] < 0.3 ? Double.NaN : p[0],
+            new double[] {0},
+            new double[] {1},
+            new boolean[] {false},
+            EVALUATIONS);
+    assertThat(found.value()).isEqualTo(1);
   }
 }
