@@ -60,9 +60,17 @@ final class Report {
     }
     int start = whole.start() + scalar.inset();
     Place at = new Place(whole.sheet(), new Span(start + flaw.from(), start + flaw.to()));
+    String faulty = scalar.text().substring(flaw.from(), flaw.to());
     List<Fix> fixes =
         flaw.spellings().stream()
-            .map(spelling -> new Fix(title(spelling), List.of(new Edit(at, spelling)), flaw.safe()))
+            .map(
+                spelling -> {
+                  // A long form is a mapping: inside quotes it would stay a text.
+                  Place mended = spelling.startsWith("{") ? whole : at;
+                  String title =
+                      spelling.isBlank() ? "remove `" + faulty.strip() + "`" : title(spelling);
+                  return new Fix(title, List.of(new Edit(mended, spelling)), flaw.safe());
+                })
             .toList();
     // An insertion has no characters of its own to mark.
     Place marked = flaw.from() == flaw.to() ? whole : at;

@@ -77,8 +77,7 @@ final class Amounts {
       throw cursor.refuse(from, to, text.why());
     }
     if (!text.isStrict()) {
-      cursor.note(
-          Problem.Kind.NOT_ONE_VALUE, from, to, text.why(), text.safe(), text.spellings());
+      cursor.note(Problem.Kind.NOT_ONE_VALUE, from, to, text.why(), text.safe(), text.spellings());
     }
     return text.spellings().get(0);
   }
@@ -126,8 +125,7 @@ final class Amounts {
     if (UnitTable.read(text.toString()).isEmpty()) {
       return word;
     }
-    Token whole =
-        new Token(Kind.WORD, word.from(), cursor.peek(pieces - 1).to(), text.toString());
+    Token whole = new Token(Kind.WORD, word.from(), cursor.peek(pieces - 1).to(), text.toString());
     for (int i = 0; i < pieces; i++) {
       cursor.take();
     }
@@ -153,7 +151,6 @@ final class Amounts {
     if (spellings.isEmpty()) {
       why = number + " has no unit: " + why;
     }
-    return cursor.refuse(
-        Problem.Kind.MISSING_UNIT, numeral.from(), numeral.to(), why, spellings);
+    return cursor.refuse(Problem.Kind.MISSING_UNIT, numeral.from(), numeral.to(), why, spellings);
   }
 }

@@ -50,8 +50,7 @@ final class Cursor {
 
   private <T> Reading<T> reading(T value) {
     boolean certain = value != null && flaws.leaveMeaning();
-    return new Reading<>(
-        certain ? Optional.of(value) : Optional.empty(), flaws.finished());
+    return new Reading<>(certain ? Optional.of(value) : Optional.empty(), flaws.finished());
   }
 
   Token peek() {
@@ -94,8 +93,7 @@ final class Cursor {
   }
 
   /** Notes a flaw and goes on: what is meant is known. */
-  void note(
-      Problem.Kind kind, int from, int to, String why, boolean safe, List<String> spellings) {
+  void note(Problem.Kind kind, int from, int to, String why, boolean safe, List<String> spellings) {
     flaws.add(new Flaw(kind, from, to, why, spellings, safe));
   }
 
@@ -105,15 +103,13 @@ final class Cursor {
   }
 
   /** Notes a flaw and gives the value up. */
-  RuntimeException refuse(
-      Problem.Kind kind, int from, int to, String why, List<String> spellings) {
+  RuntimeException refuse(Problem.Kind kind, int from, int to, String why, List<String> spellings) {
     note(kind, from, to, why, false, spellings);
     return new Refusal();
   }
 
   /** Gives the value up although what is meant is certain: the mended text says it. */
-  RuntimeException mend(
-      Problem.Kind kind, int from, int to, String why, String spelling) {
+  RuntimeException mend(Problem.Kind kind, int from, int to, String why, String spelling) {
     note(kind, from, to, why, true, List.of(spelling));
     return new Refusal();
   }

@@ -9,7 +9,10 @@ import java.util.Optional;
  * @param at the point the figures hold at, where stated ({@code ±80 nA at 85 °C})
  */
 public record Deviation(
-    List<Tolerance> tolerances, Optional<Drift> drift, Optional<Basis> basis, Optional<Quantity> at) {
+    List<Tolerance> tolerances,
+    Optional<Drift> drift,
+    Optional<Basis> basis,
+    Optional<Quantity> at) {
   public static final Deviation NONE =
       new Deviation(List.of(), Optional.empty(), Optional.empty(), Optional.empty());
 

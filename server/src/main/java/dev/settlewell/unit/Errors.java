@@ -97,8 +97,7 @@ final class Errors {
     List<String> likely = UnitSlips.likely(expected);
     String example = "±1 " + (likely.isEmpty() ? "%" : likely.get(0));
     Token token = cursor.peek();
-    return cursor.refuse(
-        token.from(), token.to(), "an error is expected here, such as " + example);
+    return cursor.refuse(token.from(), token.to(), "an error is expected here, such as " + example);
   }
 
   /** Takes a comma between errors for the slip it is. */
@@ -169,8 +168,7 @@ final class Errors {
     accept(numeral, word, unit);
     double magnitude = numeral.times(UnitTable.power(unit));
     if (!sign.is(Kind.PLUS_MINUS)) {
-      cursor.slip(
-          numeral.from(), numeral.to(), "a tolerance has its sign", "±" + numeral.digits());
+      cursor.slip(numeral.from(), numeral.to(), "a tolerance has its sign", "±" + numeral.digits());
     }
     tolerances.add(new Tolerance(magnitude, magnitude, unit, of(unit)));
   }
@@ -198,8 +196,7 @@ final class Errors {
       cursor.take();
     }
     if (!cursor.isNext(Kind.MINUS) && !cursor.isNext(Kind.SLASH_MINUS)) {
-      throw cursor.refuse(
-          sign.from(), sign.to(), "a tolerance goes both ways", "±", "+0/-");
+      throw cursor.refuse(sign.from(), sign.to(), "a tolerance goes both ways", "±", "+0/-");
     }
     cursor.take();
     Numeral minus = amounts.number(expected, "");
@@ -209,7 +206,7 @@ final class Errors {
     }
     String spelling =
         "+" + plus.digits() + "/-" + minus.digits() + " " + UnitTable.canonical(unit.written());
-    int end = minus.to() + cursor.text(minus.to(), cursor.peek().from()).stripTrailing().length();
+    int end = amounts.unitEnd(minus.to());
     cursor.slip(sign.from(), end, "the unit stands once, behind both sides", spelling);
     int power = UnitTable.power(unit);
     tolerances.add(new Tolerance(minus.times(power), plus.times(power), unit, of(unit)));

@@ -63,8 +63,7 @@ final class Flaws {
     }
     List<String> whole = flaw.spellings().stream().map(s -> mended(flaw, s)).distinct().toList();
     String message = "write " + alternatives(whole) + ": " + flaw.message();
-    return new Flaw(
-        flaw.kind(), flaw.from(), flaw.to(), message, flaw.spellings(), flaw.safe());
+    return new Flaw(flaw.kind(), flaw.from(), flaw.to(), message, flaw.spellings(), flaw.safe());
   }
 
   /** The whole value with this spelling, and the first spelling of every other flaw. */

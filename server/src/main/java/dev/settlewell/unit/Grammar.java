@@ -16,7 +16,9 @@ final class Grammar {
           Dimension.CYCLES,
           Dimension.BITS);
 
-  /** What data sheets write for the two words of the grammar; plain peak is what is meant anyway. */
+  /**
+   * What data sheets write for the two words of the grammar; plain peak is what is meant anyway.
+   */
   private static final Set<String> PEAK_TO_PEAK = Set.of("pp", "p-p", "pk-pk", "Vpp", "PP", "P-P");
 
   private final Cursor cursor;
@@ -54,8 +56,7 @@ final class Grammar {
     boolean two = first.is(Kind.NUMBER) && second.is(Kind.WORD);
     int pieces = two ? 2 : 1;
     String text = two ? first.text() + second.text() : first.text();
-    Optional<Code.Reading> code =
-        two || first.is(Kind.WORD) ? Code.read(text) : Optional.empty();
+    Optional<Code.Reading> code = two || first.is(Kind.WORD) ? Code.read(text) : Optional.empty();
     if (code.isPresent() && !fits(code.get()) && first.touches(second) && !second.is("m")) {
       throw code.get().notTaken(cursor, first.from(), second.to(), expected);
     }
@@ -154,7 +155,11 @@ final class Grammar {
           Problem.Kind.AMBIGUOUS_TEXT,
           from,
           to,
-          symbol + " is read as milliohm: write " + number + " mΩ, or " + number
+          symbol
+              + " is read as milliohm: write "
+              + number
+              + " mΩ, or "
+              + number
               + " MΩ if megohm is meant",
           false,
           List.of(number + " mΩ", number + " MΩ"));
@@ -265,8 +270,7 @@ final class Grammar {
     String unit = high.replaceFirst("^[-+]?[0-9.,eE]*\\s*", "");
     String lower = low.matches(".*[0-9]") && !unit.isEmpty() ? low + " " + unit : low;
     String why = "one value is wanted here, and limits are said in the long form";
-    throw cursor.refuse(
-        first.from(), end, why, "{min: " + lower + ", max: " + high + "}");
+    throw cursor.refuse(first.from(), end, why, "{min: " + lower + ", max: " + high + "}");
   }
 
   /** {@code 10 kΩ @ 25 °C}: a value without errors holds at no point of its own. */

@@ -31,7 +31,8 @@ final class Leftovers {
           Map.entry("~", "typical"),
           Map.entry("≈", "typical"));
 
-  private static final Set<String> DASHES = Set.of("-", "–", "—", "..", "...", "…", "~", "until", "/");
+  private static final Set<String> DASHES =
+      Set.of("-", "–", "—", "..", "...", "…", "~", "until", "/");
 
   private Leftovers() {}
 

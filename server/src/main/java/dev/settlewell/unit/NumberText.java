@@ -87,7 +87,8 @@ record NumberText(List<String> spellings, boolean safe, String why) {
     }
     Matcher noFraction = NO_FRACTION.matcher(text);
     if (noFraction.matches()) {
-      return certain(noFraction.group(1) + noFraction.group(2), "no point without digits behind it");
+      return certain(
+          noFraction.group(1) + noFraction.group(2), "no point without digits behind it");
     }
     Matcher zeros = LEADING_ZEROS.matcher(text);
     if (zeros.matches()) {

@@ -49,8 +49,7 @@ final class Ranges {
     Numeral numeral = amounts.signed(expected);
     boolean bare =
         !cursor.isNext(Kind.WORD) || cursor.isNextWord("to") || cursor.isNextWord("until");
-    Optional<Unit> unit =
-        bare ? Optional.empty() : Optional.of(amounts.unit(numeral, expected));
+    Optional<Unit> unit = bare ? Optional.empty() : Optional.of(amounts.unit(numeral, expected));
     return new End(numeral, unit, amounts.unitEnd(numeral.to()));
   }
 
@@ -98,8 +97,7 @@ final class Ranges {
       throw outOfRange(from, end, "the range has no width: both ends are the same");
     }
     if (low > high && !mayFall) {
-      String swapped =
-          cursor.text(second.from(), end) + " to " + cursor.text(from, first.to());
+      String swapped = cursor.text(second.from(), end) + " to " + cursor.text(from, first.to());
       throw cursor.refuse(
           Problem.Kind.VALUE_OUT_OF_RANGE,
           from,
@@ -119,11 +117,7 @@ final class Ranges {
       throw outOfRange(sign.from(), end, twoEnds(expected));
     }
     String amount = numeral.digits() + " " + UnitTable.canonical(unit.written());
-    cursor.slip(
-        sign.from(),
-        end,
-        "a range names both its ends",
-        "-" + amount + " to " + amount);
+    cursor.slip(sign.from(), end, "a range names both its ends", "-" + amount + " to " + amount);
     double high = numeral.times(UnitTable.power(unit));
     return new Range(-high, high, unit);
   }
@@ -131,8 +125,7 @@ final class Ranges {
   private void noTolerance() {
     Token next = cursor.peek();
     if (next.is(Kind.PLUS_MINUS)) {
-      throw cursor.refuse(
-          next.from(), cursor.lastEnd(), "the ends of a range bear no tolerance");
+      throw cursor.refuse(next.from(), cursor.lastEnd(), "the ends of a range bear no tolerance");
     }
   }
 

@@ -68,8 +68,7 @@ final class UnitConversions {
     }
     String noUnit = text + " is no unit of the format";
     if (text.equals("°F") || text.equals("degF")) {
-      return wrong(
-          cursor, number.from(), word.to(), noUnit, List.of(celsius(number, expected)));
+      return wrong(cursor, number.from(), word.to(), noUnit, List.of(celsius(number, expected)));
     }
     Optional<String> converted = converted(number, text, expected).or(() -> volts(number, text));
     if (converted.isPresent()) {

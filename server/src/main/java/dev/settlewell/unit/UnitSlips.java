@@ -127,8 +127,7 @@ final class UnitSlips {
   }
 
   private static Unit take(Cursor cursor, Token word, String why, String spelling) {
-    cursor.note(
-        Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, true, List.of(spelling));
+    cursor.note(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, true, List.of(spelling));
     return UnitTable.read(spelling).orElseThrow();
   }
 
@@ -166,7 +165,9 @@ final class UnitSlips {
   }
 
   private static List<String> withItself(String top) {
-    return UnitTable.read(top).isPresent() ? List.of(UnitTable.canonical(top)) : simpleVariants(top);
+    return UnitTable.read(top).isPresent()
+        ? List.of(UnitTable.canonical(top))
+        : simpleVariants(top);
   }
 
   private static String perSpelling(String per) {
@@ -193,7 +194,8 @@ final class UnitSlips {
   /** Variants that keep the first letter come first; but {@code mhz} is a megahertz as a rule. */
   private static List<String> nearest(String text, List<String> variants) {
     String first = text.substring(0, 1);
-    variants.sort(Comparator.comparing(v -> isMegaAsARule(v) ? !v.startsWith("M") : !v.startsWith(first)));
+    variants.sort(
+        Comparator.comparing(v -> isMegaAsARule(v) ? !v.startsWith("M") : !v.startsWith(first)));
     return variants;
   }
 
@@ -253,8 +255,7 @@ final class UnitSlips {
   }
 
   /** Gives up a value whose unit is known but not taken here. */
-  static RuntimeException wrong(
-      Cursor cursor, int from, int to, Unit unit, Expected expected) {
+  static RuntimeException wrong(Cursor cursor, int from, int to, Unit unit, Expected expected) {
     Optional<String> base = base(expected);
     String why = unit.written() + " does not fit: this key takes " + takes(expected);
     List<String> spellings = asDrift(unit, expected);

@@ -141,7 +141,8 @@ public final class UnitTable {
   /** {@code ppm} of {@code ppm/K}; empty where the word is no such drift. */
   static Optional<Unit> numeratorPerKelvin(String word) {
     int slash = word.lastIndexOf('/');
-    if (slash < 0 || !List.of("K", "°C", "degC", "\u212A", "℃").contains(word.substring(slash + 1))) {
+    if (slash < 0
+        || !List.of("K", "°C", "degC", "\u212A", "℃").contains(word.substring(slash + 1))) {
       return Optional.empty();
     }
     return simple(word.substring(0, slash)).map(Parsed::unit);

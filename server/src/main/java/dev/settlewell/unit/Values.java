@@ -1,11 +1,11 @@
 package dev.settlewell.unit;
 
 /**
- * Reads one value of a sheet by the grammar of {@code schema/grammar.md}: never guesses, and answers
- * what it refuses with the spelling to use.
+ * Reads one value of a sheet by the grammar of {@code schema/grammar.md}: never guesses, and
+ * answers what it refuses with the spelling to use.
  *
- * <p>A reading has a value beside flaws only where every flaw is a slip of spelling whose meaning is
- * certain ({@link Flaw#safe()}), or a doubt.
+ * <p>A reading has a value beside flaws only where every flaw is a slip of spelling whose meaning
+ * is certain ({@link Flaw#safe()}), or a doubt.
  */
 public final class Values {
   private static final Expected NO_UNIT = Expected.of();
@@ -37,8 +37,8 @@ public final class Values {
   }
 
   /**
-   * {@link Form#COUNT}, {@link Form#PLAIN}, {@link Form#FRACTION}, {@link Form#RATIO}; decibels of a
-   * ratio become a ratio of amplitudes.
+   * {@link Form#COUNT}, {@link Form#PLAIN}, {@link Form#FRACTION}, {@link Form#RATIO}; decibels of
+   * a ratio become a ratio of amplitudes.
    */
   public static Reading<Double> number(Form form, String raw) {
     return Cursor.read(

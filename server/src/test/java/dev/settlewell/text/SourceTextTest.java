@@ -19,8 +19,27 @@ import org.junit.jupiter.params.provider.EnumSource;
  */
 class SourceTextTest {
   private static final List<String> PIECES =
-      List.of("a", "Ω", "µ", "漢", "\uD83D\uDE00", "\uD834\uDD1E", "\n", "\r\n", "\r", "\n\r", " ",
-          "\t", "\u0085", "\u2028", "\u2029", "\uFEFF", "é", "e\u0301", "key: 1 V", "");
+      List.of(
+          "a",
+          "Ω",
+          "µ",
+          "漢",
+          "\uD83D\uDE00",
+          "\uD834\uDD1E",
+          "\n",
+          "\r\n",
+          "\r",
+          "\n\r",
+          " ",
+          "\t",
+          "\u0085",
+          "\u2028",
+          "\u2029",
+          "\uFEFF",
+          "é",
+          "e\u0301",
+          "key: 1 V",
+          "");
 
   @ParameterizedTest
   @EnumSource(PositionEncoding.class)

@@ -15,13 +15,15 @@ class RoundTripTest {
   private static final Expected ANY = Expected.of();
 
   private static final List<String> SYMBOLS =
-      List.of("Ω", "F", "V", "A", "Hz", "s", "m", "g", "Pa", "1", "LSB", "cycles", "°C", "V/K",
-          "1/K", "V/√Hz", "V/s", "W/K", "m/s", "bar");
+      List.of(
+          "Ω", "F", "V", "A", "Hz", "s", "m", "g", "Pa", "1", "LSB", "cycles", "°C", "V/K", "1/K",
+          "V/√Hz", "V/s", "W/K", "m/s", "bar");
 
   private static final List<String> UNITS =
-      List.of("Ω", "kΩ", "kohm", "MOhm", "pF", "uF", "µF", "μF", "V", "mV", "nA", "MHz", "kSPS",
-          "S/s", "us", "mm", "%", "ppm", "LSB", "cycles", "°C", "degC", "uV/degC", "ppm/K",
-          "nV/rtHz", "V/us", "mW/K", "bar", "%RH", "m/s");
+      List.of(
+          "Ω", "kΩ", "kohm", "MOhm", "pF", "uF", "µF", "μF", "V", "mV", "nA", "MHz", "kSPS", "S/s",
+          "us", "mm", "%", "ppm", "LSB", "cycles", "°C", "degC", "uV/degC", "ppm/K", "nV/rtHz",
+          "V/us", "mW/K", "bar", "%RH", "m/s");
 
   /** A value of any size that the grammar takes, evenly spread over the decades. */
   private static double anyValue(Random random, int lowest, int highest) {
@@ -83,7 +85,8 @@ class RoundTripTest {
     for (int seed = 0; seed < CASES; seed++) {
       Random random = new Random(seed);
       String unit = UNITS.get(random.nextInt(UNITS.size()));
-      BigDecimal number = new BigDecimal(random.nextInt(1_000_000)).movePointLeft(random.nextInt(6));
+      BigDecimal number =
+          new BigDecimal(random.nextInt(1_000_000)).movePointLeft(random.nextInt(6));
       double scale = UnitTable.read(unit).map(Unit::scale).orElse(1.0);
       double exact = number.multiply(new BigDecimal(Double.toString(scale))).doubleValue();
       String text = number.toPlainString() + " " + unit;

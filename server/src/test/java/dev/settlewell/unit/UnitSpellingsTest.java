@@ -69,8 +69,10 @@ class UnitSpellingsTest {
   void canonicalEquivalentsAreTheSameUnit(String written, String canonical) {
     assertThat(Normalizer.normalize(written, Normalizer.Form.NFC)).isEqualTo(canonical);
     assertThat(UnitTable.canonical(written)).isEqualTo(canonical);
-    assertThat(UnitTable.read("m" + written).orElseThrow().comparableWith(
-            UnitTable.read(canonical).orElseThrow()))
+    assertThat(
+            UnitTable.read("m" + written)
+                .orElseThrow()
+                .comparableWith(UnitTable.read(canonical).orElseThrow()))
         .isTrue();
   }
 
@@ -84,8 +86,18 @@ class UnitSpellingsTest {
   }
 
   @ParameterizedTest
-  @CsvSource({"kohm, kΩ", "MOhm, MΩ", "uF, µF", "degC, °C", "ppm/degC, ppm/°C", "nV/rtHz, nV/√Hz",
-      "V/us, V/µs", "kSPS, kSPS", "rpm, rpm", "%RH, %RH"})
+  @CsvSource({
+    "kohm, kΩ",
+    "MOhm, MΩ",
+    "uF, µF",
+    "degC, °C",
+    "ppm/degC, ppm/°C",
+    "nV/rtHz, nV/√Hz",
+    "V/us, V/µs",
+    "kSPS, kSPS",
+    "rpm, rpm",
+    "%RH, %RH"
+  })
   void canonical(String written, String canonical) {
     assertThat(UnitTable.canonical(written)).isEqualTo(canonical);
     assertThat(UnitTable.canonical(canonical)).isEqualTo(canonical);
@@ -93,8 +105,10 @@ class UnitSpellingsTest {
 
   /** A prefix that a unit cannot bear makes no unit. */
   @ParameterizedTest
-  @CsvSource({"m°C", "k%", "mLSB", "kcycles", "mdB", "kbits", "mSPS", "µS/s", "KHz", "cm", "hPa",
-      "TΩ", "kkΩ", "mmm", "V/A", "V/V/V"})
+  @CsvSource({
+    "m°C", "k%", "mLSB", "kcycles", "mdB", "kbits", "mSPS", "µS/s", "KHz", "cm", "hPa", "TΩ", "kkΩ",
+    "mmm", "V/A", "V/V/V"
+  })
   void noUnit(String written) {
     assertThat(UnitTable.read(written)).isEmpty();
   }

@@ -94,8 +94,19 @@ class ValuesAcceptedTest {
   }
 
   @ParameterizedTest
-  @CsvSource({"4k7, 4700", "2R2, 2.2", "R47, 0.47", "1M, 1e6", "4K7, 4700", "47K, 47000",
-      "0R1, 0.1", "L47, 0.00047", "4L7, 0.0047", "10 kΩ, 1e4", "1G, 1e9"})
+  @CsvSource({
+    "4k7, 4700",
+    "2R2, 2.2",
+    "R47, 0.47",
+    "1M, 1e6",
+    "4K7, 4700",
+    "47K, 47000",
+    "0R1, 0.1",
+    "L47, 0.00047",
+    "4L7, 0.0047",
+    "10 kΩ, 1e4",
+    "1G, 1e9"
+  })
   void resistorCode(String raw, double ohms) {
     Toleranced read = accepted(Values.component(raw, OHM));
     assertThat(read.value()).isEqualTo(ohms);
@@ -103,8 +114,18 @@ class ValuesAcceptedTest {
   }
 
   @ParameterizedTest
-  @CsvSource({"100n, 1e-7", "4p7, 4.7e-12", "1µ0, 1e-6", "1u0, 1e-6", "10p, 1e-11", "4m7, 0.0047",
-      "100 nF, 1e-7", "p47, 0.47e-12", "2F, 2", "2 F, 2"})
+  @CsvSource({
+    "100n, 1e-7",
+    "4p7, 4.7e-12",
+    "1µ0, 1e-6",
+    "1u0, 1e-6",
+    "10p, 1e-11",
+    "4m7, 0.0047",
+    "100 nF, 1e-7",
+    "p47, 0.47e-12",
+    "2F, 2",
+    "2 F, 2"
+  })
   void capacitorCode(String raw, double farads) {
     Toleranced read = accepted(Values.component(raw, FARAD));
     assertThat(read.value()).isEqualTo(farads);
@@ -120,8 +141,15 @@ class ValuesAcceptedTest {
   }
 
   @ParameterizedTest
-  @CsvSource({"±1 %, 0.01, 0.01", "±1%, 0.01, 0.01", "± 1 %, 0.01, 0.01", "+-1 %, 0.01, 0.01",
-      "+/-20 %, 0.2, 0.2", "+80/-20 %, 0.2, 0.8", "+80/-20%, 0.2, 0.8"})
+  @CsvSource({
+    "±1 %, 0.01, 0.01",
+    "±1%, 0.01, 0.01",
+    "± 1 %, 0.01, 0.01",
+    "+-1 %, 0.01, 0.01",
+    "+/-20 %, 0.2, 0.2",
+    "+80/-20 %, 0.2, 0.8",
+    "+80/-20%, 0.2, 0.8"
+  })
   void toleranceOfAValue(String tolerance, double minus, double plus) {
     Toleranced read = accepted(Values.quantity("4.7 kΩ " + tolerance, OHM));
     assertThat(read.deviation().tolerances())
@@ -137,8 +165,7 @@ class ValuesAcceptedTest {
 
   @Test
   void boxDrift() {
-    Toleranced read =
-        accepted(Values.quantity("2.5 V ±0.1 % 25 ppm/K box -40 °C to 125 °C", VOLT));
+    Toleranced read = accepted(Values.quantity("2.5 V ±0.1 % 25 ppm/K box -40 °C to 125 °C", VOLT));
     Drift drift = read.deviation().drift().orElseThrow();
     assertThat(drift.perKelvin()).isEqualTo(25e-6);
     assertThat(drift.box().orElseThrow().low()).isEqualTo(-40);
@@ -169,8 +196,7 @@ class ValuesAcceptedTest {
 
   @Test
   void deviationAtAPoint() {
-    Deviation read =
-        accepted(Values.deviation("±80 nA at 85 °C", Expected.of(Dimension.CURRENT)));
+    Deviation read = accepted(Values.deviation("±80 nA at 85 °C", Expected.of(Dimension.CURRENT)));
     assertThat(read.tolerances().get(0).plus()).isEqualTo(80e-9);
     assertThat(read.at().orElseThrow().value()).isEqualTo(85);
   }
@@ -207,9 +233,16 @@ class ValuesAcceptedTest {
   }
 
   @ParameterizedTest
-  @CsvSource({"0 °C to 40 °C, 0, 40", "0 to 6 m, 0, 6", "-20 to 20 A, -20, 20",
-      "500 mV to 4.5 V, 0.5, 4.5", "0.5 MHz to 16 MHz, 5e5, 16e6", "273.15 K to 373.15 K, 0, 100",
-      "0 bar to 10 bar, 0, 10", "0 to 100 %RH, 0, 100"})
+  @CsvSource({
+    "0 °C to 40 °C, 0, 40",
+    "0 to 6 m, 0, 6",
+    "-20 to 20 A, -20, 20",
+    "500 mV to 4.5 V, 0.5, 4.5",
+    "0.5 MHz to 16 MHz, 5e5, 16e6",
+    "273.15 K to 373.15 K, 0, 100",
+    "0 bar to 10 bar, 0, 10",
+    "0 to 100 %RH, 0, 100"
+  })
   void range(String raw, double low, double high) {
     Range read = accepted(Values.range(raw, ANY));
     assertThat(read.low()).isCloseTo(low, within(1e-12));
