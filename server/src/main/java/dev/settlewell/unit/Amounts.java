@@ -110,6 +110,14 @@ final class Amounts {
     return from + between.stripTrailing().length();
   }
 
+  /** Gives up a value that is not above zero where the key wants one that is. */
+  void checkPositive(Quantity quantity, Expected expected, int from, int to) {
+    if (expected.positive() && !(quantity.value() > 0)) {
+      throw cursor.refuse(
+          Problem.Kind.VALUE_OUT_OF_RANGE, from, to, "the value must be above zero", List.of());
+    }
+  }
+
   /** {@code k Ω} as {@code kΩ}, where only the blank is wrong. */
   private Token joined(Token word) {
     Token next = cursor.peek();

@@ -16,9 +16,7 @@ final class Grammar {
           Dimension.CYCLES,
           Dimension.BITS);
 
-  /**
-   * What data sheets write for the two words of the grammar; plain peak is what is meant anyway.
-   */
+  /** What data sheets write for {@code peak-to-peak}. */
   private static final Set<String> PEAK_TO_PEAK = Set.of("pp", "p-p", "pk-pk", "Vpp", "PP", "P-P");
 
   private final Cursor cursor;
@@ -39,7 +37,7 @@ final class Grammar {
     Unit written = amounts.unit(numeral, expected);
     Quantity quantity = numeral.in(written, expected.temperatureDifference());
     int end = amounts.unitEnd(numeral.to());
-    checkPositive(quantity, numeral.from(), end);
+    amounts.checkPositive(quantity, expected, numeral.from(), end);
     milli(quantity, written, numeral.from(), end);
     Optional<String> of = of(quantity.unit());
     Optional<Toleranced.Amplitude> amplitude = amplitude(quantity.unit());
@@ -51,54 +49,12 @@ final class Grammar {
 
   /** {@code component = code , [ errors ] | quantity}. */
   Toleranced component() {
-    Token first = cursor.peek();
-    Token second = cursor.peek(1);
-    boolean two = first.is(Kind.NUMBER) && second.is(Kind.WORD);
-    int pieces = two ? 2 : 1;
-    String text = two ? first.text() + second.text() : first.text();
-    Optional<Code.Reading> code = two || first.is(Kind.WORD) ? Code.read(text) : Optional.empty();
-    if (code.isPresent() && !fits(code.get()) && first.touches(second) && !second.is("m")) {
-      throw code.get().notTaken(cursor, first.from(), second.to(), expected);
-    }
-    if (code.isEmpty() || !fits(code.get()) || two && isUnit(second, code.get())) {
+    Optional<Quantity> code = new Codes(cursor, expected).read();
+    if (code.isEmpty()) {
       return quantity();
     }
-    for (int i = 0; i < pieces; i++) {
-      cursor.take();
-    }
-    int end = two ? second.to() : first.to();
-    if (two && !first.touches(second)) {
-      String why = "a letter-digit code has no blank";
-      cursor.slip(first.from(), second.to(), why, first.text() + second.text());
-    }
-    Quantity quantity = code.get().quantity();
-    checkPositive(quantity, first.from(), end);
-    letter(code.get(), first.from(), end);
     noPoint();
-    return Toleranced.exact(quantity).with(errors(quantity.unit()));
-  }
-
-  private boolean fits(Code.Reading code) {
-    return UnitSlips.accepts(expected, code.quantity().unit());
-  }
-
-  /** {@code 100 n} lacks its unit; {@code 5 F} and {@code 5F} have theirs. */
-  private boolean isUnit(Token word, Code.Reading code) {
-    return UnitTable.read(word.text()).filter(u -> u.dimension() == code.dimension()).isPresent()
-        || word.text().length() == 1 && !cursor.peek().touches(word);
-  }
-
-  /** {@code 4K7J}: the letter of a tolerance is not read, and said in percent instead. */
-  private void letter(Code.Reading code, int from, int end) {
-    if (code.tolerance().isEmpty()) {
-      return;
-    }
-    String tolerance = code.plain() + " ±" + code.tolerance().get() + " %";
-    String why = "a tolerance is written in percent, not as a letter";
-    if (code.plain().length() == end - from - 1 && cursor.text(end - 1, end).equals("F")) {
-      throw cursor.refuse(from, end, why, code.plain(), tolerance);
-    }
-    throw cursor.mend(Problem.Kind.NOT_ONE_VALUE, from, end, why, tolerance);
+    return Toleranced.exact(code.get()).with(errors(code.get().unit()));
   }
 
   Deviation deviation() {
@@ -136,13 +92,6 @@ final class Grammar {
   private Deviation errors(Unit unit) {
     boolean point = !expected.temperatureDifference();
     return new Errors(cursor, Errors.ofValue(unit, point), true).read(false);
-  }
-
-  private void checkPositive(Quantity quantity, int from, int to) {
-    if (expected.positive() && !(quantity.value() > 0)) {
-      throw cursor.refuse(
-          Problem.Kind.VALUE_OUT_OF_RANGE, from, to, "the value must be above zero", List.of());
-    }
   }
 
   /** {@code 5 mohm} is often meant as megohm: read as it stands, and asked back. */
@@ -281,87 +230,5 @@ final class Grammar {
           "a value without errors is not stated at a temperature; the sheet's is stated-at";
       throw cursor.refuse(token.from(), cursor.lastEnd(), why, "");
     }
-  }
-
-  // Numbers without a unit.
-
-  /** {@code count = digits}. */
-  double count() {
-    Token token = cursor.peek();
-    if (!token.is(Kind.NUMBER)) {
-      throw wholeNumber(token.from(), cursor.lastEnd());
-    }
-    double value = amounts.number(expected, "").times(0);
-    boolean plain = token.text().chars().allMatch(c -> c >= '0' && c <= '9');
-    if (value != Math.rint(value)) {
-      throw wholeNumber(token.from(), amounts.unitEnd(token.to()));
-    }
-    if (!plain && NumberText.of(token.text()).isStrict()) {
-      String whole = Engineering.decimal(value).toPlainString();
-      cursor.slip(token.from(), token.to(), "a count is written in digits", whole);
-    }
-    return value;
-  }
-
-  private RuntimeException wholeNumber(int from, int to) {
-    return cursor.refuse(from, to, "a whole number is expected here, such as 16");
-  }
-
-  /** {@code plain = signed}. */
-  double plain() {
-    return amounts.signed(expected).times(0);
-  }
-
-  /** {@code fraction = digits , "/" , digits}. */
-  double fraction() {
-    Token top = cursor.peek();
-    Token bottom = cursor.peek(2);
-    boolean shaped = top.is(Kind.NUMBER) && cursor.peek(1).is(Kind.SLASH) && bottom.is(Kind.NUMBER);
-    if (!shaped) {
-      throw noFraction(top);
-    }
-    cursor.take();
-    cursor.take();
-    cursor.take();
-    boolean whole = top.text().matches("\\d{1,9}") && bottom.text().matches("\\d{1,9}");
-    if (!whole || Integer.parseInt(bottom.text()) == 0) {
-      throw cursor.refuse(
-          top.from(), bottom.to(), "a fraction of two whole numbers is expected, such as 1/8");
-    }
-    return Double.parseDouble(top.text()) / Double.parseDouble(bottom.text());
-  }
-
-  private RuntimeException noFraction(Token token) {
-    String why = "a fraction is expected here, such as 1/8";
-    boolean alone = token.is(Kind.NUMBER) && cursor.peek(1).is(Kind.END);
-    if (alone && NumberText.of(token.text()).isStrict()) {
-      double parts = 1 / Double.parseDouble(token.text());
-      if (parts == Math.rint(parts) && parts >= 1 && parts < 1e9) {
-        String spelling = "1/" + Engineering.decimal(parts).toPlainString();
-        return cursor.refuse(token.from(), token.to(), "a fraction, not a decimal", spelling);
-      }
-    }
-    return cursor.refuse(token.from(), cursor.lastEnd(), why);
-  }
-
-  /** {@code ratio = signed , [ "V/V" | "dB" ]}; decibels become a ratio of amplitudes. */
-  double ratio() {
-    Numeral numeral = amounts.signed(expected);
-    Token word = cursor.peek();
-    if (word.is(Kind.END)) {
-      return numeral.times(0);
-    }
-    if (!word.is(Kind.WORD)) {
-      throw Leftovers.refusal(cursor);
-    }
-    boolean volts = word.text().equalsIgnoreCase("V/V");
-    if (!volts && !word.text().equalsIgnoreCase("dB")) {
-      String why = "a ratio has no unit, or V/V or dB";
-      throw cursor.refuse(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, List.of(""));
-    }
-    Unit unit = amounts.unit(numeral, Expected.of(Dimension.RATIO, Dimension.DECIBEL));
-    return unit.dimension() == Dimension.DECIBEL
-        ? StrictMath.pow(10, numeral.times(0) / 20)
-        : numeral.times(0);
   }
 }

@@ -18,10 +18,11 @@ record Numeral(int from, int to, String digits) {
 
   /** True for a number other than zero that is too small to be told from it. */
   boolean isTooSmall() {
-    double value = Math.abs(times(0));
+    if (Math.abs(times(0)) >= 1 / LARGEST) {
+      return false;
+    }
     String mantissa = digits.split("[eE]", 2)[0];
-    boolean zero = mantissa.chars().noneMatch(c -> c >= '1' && c <= '9');
-    return !zero && value < 1 / LARGEST;
+    return mantissa.chars().anyMatch(c -> c >= '1' && c <= '9');
   }
 
   /** This number times a power of ten, correctly rounded: shifted in decimal, not multiplied. */

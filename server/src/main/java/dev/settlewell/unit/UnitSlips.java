@@ -98,37 +98,29 @@ final class UnitSlips {
     Optional<Unit> measured = expected.measured().filter(u -> u.symbol().equalsIgnoreCase(text));
     if (measured.isPresent() && measured.get().dimension() == Dimension.WORD) {
       String why = "the measured unit is spelled the same everywhere in its channel";
-      cursor.note(
-          Problem.Kind.WRONG_UNIT,
-          word.from(),
-          word.to(),
-          why,
-          true,
-          List.of(measured.get().symbol()));
+      note(cursor, word, why, measured.get().symbol());
       return measured.get();
     }
     Optional<String> prefixed = lonePrefix(text, expected);
-    if (prefixed.isPresent()) {
-      return take(cursor, word, "the unit is spelled in full", prefixed.get());
-    }
-    Optional<String> name = Optional.ofNullable(NAMES.get(lower(text)));
-    if (name.isPresent()) {
-      return take(cursor, word, "the unit is spelled " + name.get(), name.get());
+    Optional<String> meant = prefixed.or(() -> Optional.ofNullable(NAMES.get(lower(text))));
+    if (meant.isPresent()) {
+      note(cursor, word, "the unit is spelled " + meant.get(), meant.get());
+      return UnitTable.read(meant.get()).orElseThrow();
     }
     List<String> variants = variants(text, expected);
-    if (!variants.isEmpty() && isCertain(text, variants)) {
-      return take(cursor, word, "upper and lower case count in units", variants.get(0));
+    if (variants.isEmpty()) {
+      throw UnitConversions.refusal(cursor, numeral, word, expected);
     }
-    if (!variants.isEmpty()) {
+    if (!isCertain(text, variants)) {
       String why = "upper and lower case count in units, and " + text + " is none";
       throw cursor.refuse(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, variants);
     }
-    throw UnitConversions.refusal(cursor, numeral, word, expected);
+    note(cursor, word, "upper and lower case count in units", variants.get(0));
+    return UnitTable.read(variants.get(0)).orElseThrow();
   }
 
-  private static Unit take(Cursor cursor, Token word, String why, String spelling) {
+  private static void note(Cursor cursor, Token word, String why, String spelling) {
     cursor.note(Problem.Kind.WRONG_UNIT, word.from(), word.to(), why, true, List.of(spelling));
-    return UnitTable.read(spelling).orElseThrow();
   }
 
   /** A word of the user's own, where the key takes the measured unit; {@code deg} is an angle. */
@@ -159,9 +151,7 @@ final class UnitSlips {
         }
       }
     }
-    List<String> fitting =
-        all.stream().filter(v -> accepts(expected, UnitTable.read(v).orElseThrow())).toList();
-    return fitting;
+    return all.stream().filter(v -> accepts(expected, UnitTable.read(v).orElseThrow())).toList();
   }
 
   private static List<String> withItself(String top) {

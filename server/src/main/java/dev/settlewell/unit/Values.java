@@ -8,8 +8,6 @@ package dev.settlewell.unit;
  * is certain ({@link Flaw#safe()}), or a doubt.
  */
 public final class Values {
-  private static final Expected NO_UNIT = Expected.of();
-
   private Values() {}
 
   public static Reading<Toleranced> quantity(String raw, Expected expected) {
@@ -44,12 +42,12 @@ public final class Values {
     return Cursor.read(
         raw,
         cursor -> {
-          Grammar grammar = new Grammar(cursor, NO_UNIT);
+          PlainNumbers numbers = new PlainNumbers(cursor);
           return switch (form) {
-            case COUNT -> grammar.count();
-            case PLAIN -> grammar.plain();
-            case FRACTION -> grammar.fraction();
-            case RATIO -> grammar.ratio();
+            case COUNT -> numbers.count();
+            case PLAIN -> numbers.plain();
+            case FRACTION -> numbers.fraction();
+            case RATIO -> numbers.ratio();
             default -> throw new IllegalArgumentException(form + " carries a unit");
           };
         });
