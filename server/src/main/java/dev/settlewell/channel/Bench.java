@@ -14,7 +14,6 @@ import dev.settlewell.unit.Unit;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.ToDoubleFunction;
-import org.apache.commons.math3.util.FastMath;
 
 /**
  * Where a channel's model is put together: its parameters so far, what is missing so far, and what
@@ -129,7 +128,7 @@ final class Bench {
       return Extent.constant(magnitude);
     }
     double stated = deviation.at().get().value();
-    return (x, ambient) -> magnitude * FastMath.pow(2, (ambient - stated) / 10);
+    return (x, ambient) -> magnitude * StrictMath.pow(2, (ambient - stated) / 10);
   }
 
   /**

@@ -5,7 +5,6 @@ import dev.settlewell.unit.Toleranced;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import org.apache.commons.math3.util.FastMath;
 
 /** What firmware needs to turn codes into values, and what its integers must hold. */
 final class FirmwareStudy {
@@ -93,7 +92,7 @@ final class FirmwareStudy {
 
   private static void accumulator(ChannelModel model, List<Figure> figures) {
     double sum = model.average() * (model.converterCodes() - 1);
-    double bits = Math.ceil(FastMath.log(2, sum + 1) - 1e-12);
+    double bits = Math.ceil(StrictMath.log(sum + 1) / StrictMath.log(2) - 1e-12);
     figures.add(
         Figure.of(
             "accumulator-bits",

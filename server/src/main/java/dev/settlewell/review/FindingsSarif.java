@@ -56,6 +56,7 @@ public final class FindingsSarif {
     JsonObject run = new JsonObject();
     run.add("tool", object("driver", driver()));
     run.addProperty("columnKind", "utf16CodeUnits");
+    run.add("newlineSequences", Json.strings(List.of("\r\n", "\n", "\r")));
     run.add(
         "originalUriBaseIds",
         object(ROOT, object("description", text("the folder the check was started in"))));

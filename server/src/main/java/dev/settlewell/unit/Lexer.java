@@ -73,8 +73,9 @@ final class Lexer {
             case '=' -> Kind.EQUALS;
             default -> Kind.MARK;
           };
-      int dots = text.startsWith("...", at) ? 3 : text.startsWith("..", at) ? 2 : 1;
-      add(kind, at + dots);
+      int one = Character.charCount(text.codePointAt(at));
+      int length = text.startsWith("...", at) ? 3 : text.startsWith("..", at) ? 2 : one;
+      add(kind, at + length);
     }
   }
 
