@@ -8,6 +8,7 @@ import dev.settlewell.text.Edit;
 import dev.settlewell.text.Span;
 import dev.settlewell.vocabulary.Key;
 import dev.settlewell.vocabulary.Kind;
+import dev.settlewell.vocabulary.NameKind;
 import dev.settlewell.vocabulary.Vocabulary;
 import java.util.ArrayList;
 import java.util.List;
@@ -185,7 +186,7 @@ public final class Completion {
         .ifPresent(
             skeleton ->
                 add(
-                    "new " + key.item().map(Key::name).orElse(key.name()),
+                    "new " + key.names().flatMap(Key.MapNames::nameKind).map(NameKind::word).orElse("entry"),
                     Sort.KIND,
                     "",
                     new Prose().paragraph(key.doc()),

@@ -24,6 +24,7 @@ import org.eclipse.lsp4j.jsonrpc.messages.RequestMessage;
 import org.eclipse.lsp4j.jsonrpc.messages.ResponseError;
 import org.eclipse.lsp4j.jsonrpc.messages.ResponseErrorCode;
 import org.eclipse.lsp4j.jsonrpc.messages.ResponseMessage;
+import org.eclipse.lsp4j.jsonrpc.validation.ReflectiveMessageValidator;
 
 /** Takes the client's messages in their order, lets through what its life cycle allows. */
 final class Connection {
@@ -33,6 +34,7 @@ final class Connection {
   private final FrameWriter out;
   private final MessageJsonHandler json;
   private final RemoteEndpoint remote;
+  private final ReflectiveMessageValidator validator;
   private final Gate gate;
   private final Session session;
 
@@ -47,6 +49,7 @@ final class Connection {
     this.json = new MessageJsonHandler(signatures);
     this.remote =
         new RemoteEndpoint(this::send, methods, fault -> session.faults().answer("a request", fault));
+    this.validator = new ReflectiveMessageValidator(remote);
     json.setMethodProvider(remote);
     remote.setJsonHandler(json);
     session.client().connect(remote);
@@ -73,18 +76,17 @@ final class Connection {
 
   /** False at {@code exit}. */
   private boolean take(String text) {
-    Message message;
     try {
-      message = json.parseMessage(text);
+      Message message = json.parseMessage(text);
+      if (message == null) {
+        refuse(ResponseErrorCode.ParseError, "an empty message");
+        return true;
+      }
+      return take(message);
     } catch (MessageIssueException | JsonParseException | IllegalStateException unfit) {
       takeUnfit(text);
       return true;
     }
-    if (message == null) {
-      refuse(ResponseErrorCode.ParseError, "an empty message");
-      return true;
-    }
-    return take(message);
   }
 
   private boolean take(Message message) {
@@ -93,19 +95,28 @@ final class Connection {
       if (refusal.isPresent()) {
         answer(request, refusal.get());
       } else {
-        remote.consume(request);
+        deliver(request);
       }
     } else if (message instanceof NotificationMessage notification) {
       if ("exit".equals(notification.getMethod())) {
         return false;
       }
       if (gate.passesNotifications()) {
-        remote.consume(notification);
+        validator.consume(notification);
       }
     } else {
       remote.consume(message);
     }
     return true;
+  }
+
+  /** A client that forgets to say what it can is one that can nothing. */
+  private void deliver(RequestMessage request) {
+    if (request.getMethod().equals("initialize")) {
+      remote.consume(request);
+    } else {
+      validator.consume(request);
+    }
   }
 
   /** What the protocol library cannot read: answered where there is somebody to answer. */

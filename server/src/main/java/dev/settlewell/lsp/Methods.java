@@ -38,7 +38,7 @@ final class Methods implements Endpoint {
     requests.put(
         method,
         given -> {
-          P typed = params.cast(given);
+          P typed = present(method, params.cast(given));
           View view = session.view();
           return session.worker().submit(cancel -> guarded(method, answer, typed, view, cancel));
         });
@@ -58,11 +58,22 @@ final class Methods implements Endpoint {
     }
   }
 
+  private static <P> P present(String method, P params) {
+    if (params == null) {
+      throw new ResponseErrorException(
+          new ResponseError(ResponseErrorCode.InvalidParams, method + " has parameters", null));
+    }
+    return params;
+  }
+
   /** A request that is answered at once, in the order of the stream. */
   <P, R> void immediate(String method, Class<P> params, Function<P, R> answer) {
     signatures.put(method, JsonRpcMethod.request(method, Object.class, params));
     requests.put(
-        method, given -> CompletableFuture.completedFuture(answer.apply(params.cast(given))));
+        method,
+        given ->
+            CompletableFuture.completedFuture(
+                answer.apply(present(method, params.cast(given)))));
   }
 
   /** A request without parameters that is answered at once. */
@@ -74,7 +85,13 @@ final class Methods implements Endpoint {
   /** A notification; all are taken in the order of the stream. */
   <P> void notification(String method, Class<P> params, Consumer<P> taker) {
     signatures.put(method, JsonRpcMethod.notification(method, params));
-    notifications.put(method, given -> taker.accept(params.cast(given)));
+    notifications.put(
+        method,
+        given -> {
+          if (given != null) {
+            taker.accept(params.cast(given));
+          }
+        });
   }
 
   void notification(String method, Runnable taker) {

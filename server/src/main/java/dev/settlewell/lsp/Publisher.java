@@ -78,12 +78,11 @@ final class Publisher {
     }
   }
 
-  /** A newer version waits for its own turn: what was computed would only flicker. */
+  /** A newer version, or the end, waits for its own turn: what was computed would only flicker. */
   private boolean isOutdated(Optional<Draft> draft) {
     Optional<Draft> now = draft.flatMap(d -> session.view().drafts().get(d.name()));
     return draft.isPresent()
-        && now.isPresent()
-        && now.get() != draft.get()
+        && (now.isEmpty() || now.get() != draft.get())
         && waiting.contains(draft.get().name());
   }
 
