@@ -26,7 +26,11 @@ import java.util.OptionalDouble;
 final class SettlingCircuit {
   private static final int EVALUATIONS = 60;
 
+  /** Behind an amplifier one steady state costs ten times as much, and the box matters less. */
+  private static final int EVALUATIONS_BEHIND_AMPLIFIER = 20;
+
   private final ChannelModel model;
+  private final int evaluations;
   private final double switchOhms;
   private final Limits pin;
   private final Limits hold;
@@ -40,6 +44,8 @@ final class SettlingCircuit {
 
   SettlingCircuit(ChannelModel model, Limits switchOhms, Limits pin, Limits hold) {
     this.model = model;
+    this.evaluations =
+        model.lastActive().isPresent() ? EVALUATIONS_BEHIND_AMPLIFIER : EVALUATIONS;
     this.switchOhms = switchOhms.high();
     this.pin = pin;
     this.hold = hold;
@@ -84,7 +90,7 @@ final class SettlingCircuit {
   Worst worst(Question question) {
     WorstCase.Result found =
         WorstCase.maximise(
-            point -> at(question, point, 1, null).magnitude(), low, high, corner, EVALUATIONS);
+            point -> at(question, point, 1, null).magnitude(), low, high, corner, evaluations);
     return at(question, found.point(), 1, null);
   }
 

@@ -161,7 +161,7 @@ final class SettlingStudy {
         model.lastActive().map(a -> a.drive() instanceof Drive.ClosedLoop).orElse(false);
     if (mayRing) {
       SettlingCircuit.Question slow = question(starts, timing.clock().low());
-      SettlingCircuit.Worst other = circuit.worst(slow);
+      SettlingCircuit.Worst other = circuit.at(slow, found.point(), 1, null);
       if (other.magnitude() > found.magnitude()) {
         question = slow;
         return other;
@@ -403,7 +403,8 @@ final class SettlingStudy {
             .toList();
     SettlingCircuit.Question asked =
         new SettlingCircuit.Question(question.visits(), question.period(), rails);
-    SettlingCircuit.Worst found = circuit.worst(asked);
+    // The error is the start's distance times what the circuit leaves of it: the same point is worst.
+    SettlingCircuit.Worst found = circuit.at(asked, worst.point(), 1, null);
     figures.add(
         Figure.of(
                 "settling-error-neighbour-fault",
