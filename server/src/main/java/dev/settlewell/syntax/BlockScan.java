@@ -85,7 +85,7 @@ final class BlockScan {
     int root = rootIndent();
     levels.push(new Level(false, root, root, null));
     for (number = 0; number < mending.text.lineCount(); number++) {
-      Row row = mending.row(number);
+      Row row = behindStart(mending.row(number));
       if (!mending.empty(row) && !documentMark(row)) {
         line(row);
         started = true;
@@ -339,7 +339,9 @@ final class BlockScan {
       }
       int column = content - row.content();
       boolean nested = isItem(content);
-      boolean key = !nested && hasKey(content, row.end());
+      boolean number = Character.isDigit(mending.draft.at(content)); // `- 1:30` is no key
+      boolean key =
+          !nested && (number ? colon(content, row.end()) >= 0 : hasKey(content, row.end()));
       if (!nested && !key) {
         level.last = value(content, row, level, "");
         return;
@@ -406,17 +408,9 @@ final class BlockScan {
 
   /** True where the bracket that opens the text is closed at its end: the sheet is one mapping. */
   private boolean holdsAll(int at) {
-    int end = mending.text.length();
-    int depth = 0;
-    for (int i = at; i < end; i++) {
-      char c = mending.draft.at(i);
-      depth += c == '[' || c == '{' ? 1 : Quotes.closer(c) ? -1 : 0;
-      if (depth == 0) {
-        int next = mending.nextContent(mending.text.lineAt(i));
-        return next < 0;
-      }
-    }
-    return false;
+    int end = quotes.balanced(at, -1);
+    int next = end < 0 ? -1 : mending.nextContent(mending.text.lineAt(end));
+    return end >= 0 && (next < 0 || mending.draft.at(mending.row(next).content()) == '.');
   }
 
   /**
@@ -432,7 +426,7 @@ final class BlockScan {
     }
     boolean end = line.equals("...");
     boolean mark = line.equals("---") || line.startsWith("--- ") || end;
-    boolean usual = end ? mending.nextContent(row.number()) < 0 : !started && line.equals("---");
+    boolean usual = end ? mending.nextContent(row.number()) < 0 : !started;
     if (mark && !usual) {
       mending.syntax(
           row.content(),
@@ -442,6 +436,17 @@ final class BlockScan {
       mending.draft.blank(row.content(), row.end());
     }
     return mark;
+  }
+
+  /** The rest of a line that opens the document and has content too: {@code --- {a: 1}}. */
+  private Row behindStart(Row row) {
+    int content = mending.skipBlanks(row.content() + 3);
+    boolean opens = !started && mending.slice(row.content(), row.end()).startsWith("--- ");
+    if (!opens || mending.draft.at(content) == '#') {
+      return row;
+    }
+    mending.draft.drop(row.content(), content);
+    return new Row(row.number(), row.start(), content, row.end(), 0);
   }
 
   private int nextLineStart(Row row) {
@@ -669,7 +674,7 @@ final class BlockScan {
       return value(at, row, level, "");
     }
     int stop = mending.beforeComment(at, end);
-    if ((c == '[' || c == '{') && wholeFlow(at, stop, level)) {
+    if ((c == '[' || c == '{') && wholeFlow(at, level)) {
       return value(at, row, level, "");
     }
     if (c == '&' && !starts.misread(at, stop)) {
@@ -721,16 +726,13 @@ final class BlockScan {
   }
 
   /** True for a closed list or mapping: not prose, and for the reader of the tree to judge. */
-  private boolean wholeFlow(int at, int end, Level level) {
-    int depth = 0;
-    for (int i = at; i < end; i++) {
-      char c = mending.draft.at(i);
-      if (c == '[' || c == '{') {
-        depth++;
-      } else if (Quotes.closer(c) && --depth == 0) {
-        return i + 1 == end;
-      }
+  private boolean wholeFlow(int at, Level level) {
+    int end = quotes.balanced(at, level.indent);
+    if (end < 0) {
+      return false;
     }
-    return false;
+    int lineEnd = mending.row(mending.text.lineAt(end)).end();
+    int next = mending.skipBlanks(end);
+    return next >= lineEnd || mending.draft.at(next) == '#';
   }
 }

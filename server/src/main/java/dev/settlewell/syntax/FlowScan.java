@@ -90,7 +90,7 @@ final class FlowScan {
     }
     Row row = mending.row(next);
     char first = mending.draft.at(row.content());
-    boolean outside = row.indent() <= base && !(row.indent() == base && Quotes.closer(first));
+    boolean outside = row.indent() <= base && !Quotes.closer(first);
     if (outside || keyOfBlock(row)) {
       return false;
     }
@@ -310,9 +310,17 @@ final class FlowScan {
     return mending.trimmed(at, end);
   }
 
+  /** True where a comma ends the item: before a key, or at the line's end. */
   private boolean keyFollows(int from) {
     int i = mending.skipBlanks(from);
     int start = i;
+    if (i >= lineEnd || mending.draft.at(i) == '#') {
+      return true;
+    }
+    char c = mending.draft.at(i);
+    if (c == '"' || c == '\'') {
+      i = Math.max(i, quotes.endOnLine(i, lineEnd));
+    }
     while (i < lineEnd && Mending.wordChar(mending.draft.at(i))) {
       i++;
     }

@@ -40,16 +40,18 @@ final class Quotes {
    */
   int end(int open, int base, int closers) {
     Row row = mending.row(mending.text.lineAt(open));
-    int end = endOnLine(open, row.end());
-    if (end < 0) {
-      end = endBelow(open, row.number(), base);
-    }
+    int end = closed(open, row.number(), base);
     if (end < 0) {
       return close(open, row, closers);
     }
     mending.verbatim.add(new Span(open, end));
     mending.wholes.add(new Span(open, end));
     return end;
+  }
+
+  private int closed(int open, int line, int base) {
+    int end = endOnLine(open, mending.row(line).end());
+    return end >= 0 ? end : endBelow(open, line, base);
   }
 
   private int endBelow(int open, int number, int base) {
@@ -97,6 +99,41 @@ final class Quotes {
       slashes++;
     }
     return slashes % 2 == 1;
+  }
+
+  /** Behind the bracket that closes this one; -1 where none does, on lines deeper than the base. */
+  int balanced(int open, int base) {
+    int depth = 0;
+    int line = mending.text.lineAt(open);
+    int at = open;
+    while (line >= 0) {
+      int end = mending.row(line).end();
+      while (at < end && !mending.comment(at)) {
+        char c = mending.draft.at(at);
+        boolean quote = (c == '"' || c == '\'') && (mending.gap(at - 1) || opens(at - 1));
+        depth += c == '[' || c == '{' ? 1 : closer(c) ? -1 : 0;
+        if (depth == 0) {
+          return at + 1;
+        }
+        int behind = quote ? closed(at, line, base) : -1;
+        if (behind > end) {
+          line = mending.text.lineAt(behind);
+          end = mending.row(line).end();
+        }
+        at = Math.max(at + 1, behind);
+      }
+      line = mending.nextContent(line);
+      Row row = line < 0 ? null : mending.row(line);
+      if (row == null || row.indent() <= base && !closer(mending.draft.at(row.content()))) {
+        return -1;
+      }
+      at = row.content();
+    }
+    return -1;
+  }
+
+  private boolean opens(int offset) {
+    return "[{,".indexOf(mending.draft.at(offset)) >= 0;
   }
 
   static boolean closer(char c) {
