@@ -64,7 +64,7 @@ class SyntaxRobustnessTest {
       SyntaxTree tree = checked(SHEET.substring(0, length), "prefix of " + length);
       Map<String, String> read = readings(tree);
       for (Block block : BLOCKS) {
-        if (block.end <= cut) {
+        if (block.end <= cut && !block.reading.equals(read.get(block.key))) {
           assertThat(read).as("prefix of %d", cut).containsEntry(block.key, block.reading);
         }
       }
@@ -130,7 +130,7 @@ class SyntaxRobustnessTest {
       inside(tree.root(), text);
       for (Problem problem : tree.problems()) {
         inside(problem.place(), text);
-        assertThat(problem.message()).isNotBlank();
+          held(!problem.message().isBlank(), problem);
         for (Fix fix : problem.fixes()) {
           fix.edits().stream().map(Edit::place).forEach(place -> inside(place, text));
           apart(fix.edits());
@@ -155,17 +155,23 @@ class SyntaxRobustnessTest {
       for (Node.Entry entry : mapping.entries()) {
         inside(entry.key(), text);
         inside(entry.value(), text);
-        assertThat(mapping.place().span().contains(entry.place().span())).isTrue();
+        held(mapping.place().span().contains(entry.place().span()), entry);
       }
     } else if (node instanceof Node.Sequence list) {
       for (Node item : list.items()) {
         inside(item, text);
-        assertThat(list.place().span().contains(item.place().span())).isTrue();
+        held(list.place().span().contains(item.place().span()), item);
       }
     } else if (node instanceof Node.Scalar scalar && scalar.exact()) {
       int start = scalar.place().start() + scalar.inset();
-      assertThat(start + scalar.text().length())
-          .isEqualTo(scalar.place().end() - scalar.inset());
+      held(start + scalar.text().length() == scalar.place().end() - scalar.inset(), scalar);
+    }
+  }
+
+  /** Asked millions of times: too often for an assertion library. */
+  private static void held(boolean holds, Object what) {
+    if (!holds) {
+      fail("the place does not fit: " + what);
     }
   }
 
@@ -211,7 +217,7 @@ class SyntaxRobustnessTest {
       }
       SyntaxTree tree = checked(text.toString(), "seed " + seed);
       for (int at = 0; at <= text.length(); at++) {
-        inside(Cursor.at(tree, at), tree.text(), "seed " + seed + " at " + at);
+        inside(Cursor.at(tree, at), tree.text(), "seed");
       }
     }
   }
@@ -247,7 +253,7 @@ class SyntaxRobustnessTest {
     } else if (cursor instanceof Cursor.InItem item) {
       end = item.span().end();
     }
-    assertThat(end).as(what).isLessThanOrEqualTo(text.length());
+    held(end <= text.length(), cursor + " " + what);
   }
 
   @ParameterizedTest
