@@ -36,11 +36,27 @@ public final class DiskReader implements SheetReader {
       if (Files.size(file) > LARGEST) {
         return Content.none("it is larger than 8 MiB");
       }
-      return Content.of(decoded(Files.readAllBytes(file)));
+      return Content.of(decoded(Files.readAllBytes(file), isSheet(path)));
     } catch (CharacterCodingException e) {
       return Content.none("it is not UTF-8");
     } catch (IOException | InvalidPathException | SecurityException e) {
       return Content.none("it cannot be read");
+    }
+  }
+
+  private static boolean isSheet(String path) {
+    return path.endsWith(".yaml") || path.endsWith(".yml");
+  }
+
+  /** A sheet must be UTF-8; of a source of older firmware only the comments are not ASCII. */
+  private static String decoded(byte[] bytes, boolean strict) throws CharacterCodingException {
+    try {
+      return decoded(bytes);
+    } catch (CharacterCodingException e) {
+      if (strict) {
+        throw e;
+      }
+      return new String(bytes, StandardCharsets.ISO_8859_1);
     }
   }
 

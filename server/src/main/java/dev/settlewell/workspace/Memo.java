@@ -1,5 +1,6 @@
 package dev.settlewell.workspace;
 
+import dev.settlewell.firmware.Source;
 import dev.settlewell.sheet.Link;
 import dev.settlewell.sheet.Linked;
 import dev.settlewell.sheet.Sheet;
@@ -21,12 +22,14 @@ import java.util.concurrent.ConcurrentHashMap;
 public final class Memo {
   private record Known(
       Sheet sheet, List<Sheet> used, boolean whole, List<Problem> problems, Linked linked) {
-    boolean isOf(Sheet s, List<Sheet> u, boolean w, List<Problem> p, LocalDate date) {
+    boolean isOf(
+        Sheet s, List<Sheet> u, boolean w, List<Problem> p, Map<String, Source> f, LocalDate d) {
       return sheet == s
           && same(used, u)
           && whole == w
           && problems.equals(p)
-          && linked.date().equals(date);
+          && linked.sources().equals(f)
+          && linked.date().equals(d);
     }
 
     private static boolean same(List<Sheet> a, List<Sheet> b) {
@@ -40,6 +43,7 @@ public final class Memo {
 
   private final Vocabulary vocabulary;
   private final Map<String, Sheet> sheets = new ConcurrentHashMap<>();
+  private final Map<String, Source> sources = new ConcurrentHashMap<>();
   private final Map<String, Known> links = new ConcurrentHashMap<>();
 
   public Memo(Vocabulary vocabulary) {
@@ -60,13 +64,29 @@ public final class Memo {
     return sheet;
   }
 
+  /** A source of firmware; the same object while its text is the same. */
+  Source source(String path, String content) {
+    Source known = sources.get(path);
+    boolean same = known != null && known.text().orElseThrow().content().equals(content);
+    if (!same) {
+      known = Source.of(SourceText.of(path, content));
+      sources.put(path, known);
+    }
+    return known;
+  }
+
   Linked linked(
-      Sheet sheet, List<Sheet> used, boolean whole, List<Problem> problems, LocalDate date) {
+      Sheet sheet,
+      List<Sheet> used,
+      boolean whole,
+      List<Problem> problems,
+      Map<String, Source> sources,
+      LocalDate date) {
     Known known = links.get(sheet.path());
-    if (known != null && known.isOf(sheet, used, whole, problems, date)) {
+    if (known != null && known.isOf(sheet, used, whole, problems, sources, date)) {
       return known.linked();
     }
-    Linked linked = Link.link(sheet, used, whole, problems, vocabulary, date);
+    Linked linked = Link.link(sheet, used, whole, problems, vocabulary, date).with(sources);
     links.put(sheet.path(), new Known(sheet, used, whole, problems, linked));
     return linked;
   }
@@ -74,6 +94,7 @@ public final class Memo {
   /** Forgets a path that is gone. */
   public void forget(String path) {
     sheets.remove(path);
+    sources.remove(path);
     links.remove(path);
   }
 }

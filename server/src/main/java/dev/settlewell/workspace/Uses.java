@@ -1,6 +1,8 @@
 package dev.settlewell.workspace;
 
+import dev.settlewell.firmware.Source;
 import dev.settlewell.sheet.Linked;
+import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Sheet;
 import dev.settlewell.sheet.Slot;
 import dev.settlewell.text.Place;
@@ -69,7 +71,34 @@ final class Uses {
       }
     }
     circles(sheet, problems);
-    return memo.linked(sheet, List.copyOf(reached.values()), whole, problems, date);
+    return memo.linked(
+        sheet, List.copyOf(reached.values()), whole, problems, sources(sheet), date);
+  }
+
+  /** The source files that the sheet's firmware constants stand in, by the path as written. */
+  private Map<String, Source> sources(Sheet sheet) {
+    Map<String, Source> sources = new LinkedHashMap<>();
+    List<Slot<Part>> constants = sheet.top().list("firmware", Part.class).orElse(List.of());
+    for (Slot<Part> constant : constants) {
+      Slot<String> in = constant.stated().map(part -> part.text("in")).orElse(null);
+      if (in != null && in.isStated()) {
+        sources.computeIfAbsent(in.stated().orElseThrow(), path -> source(sheet, path, in.place()));
+      }
+    }
+    return sources;
+  }
+
+  private Source source(Sheet sheet, String written, Place place) {
+    Step step = step(sheet, written, place);
+    if (step.path().isEmpty()) {
+      boolean outside =
+          step.problem()
+              .filter(problem -> problem.kind() == Problem.Kind.USE_OUTSIDE_WORKSPACE)
+              .isPresent();
+      return Source.none(outside ? "it lies outside the workspace" : "there is no such file");
+    }
+    String path = step.path().get();
+    return memo.source(path, content(path).text().orElseThrow());
   }
 
   /** For each item of {@code use} that leads back to the sheet, the way it takes. */

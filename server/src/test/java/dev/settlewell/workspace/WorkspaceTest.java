@@ -209,6 +209,31 @@ class WorkspaceTest {
   }
 
   @Test
+  void sources_of_firmware_come_with_the_sheet_and_stay_inside_the_workspace() {
+    files
+        .with("/w/.git/HEAD", "")
+        .with("/etc/other.h", "#define X 1")
+        .with("/w/src/a.h", "#define X 1")
+        .with(
+            "/w/doc/a.channels.yaml",
+            HEAD
+                + "firmware:\n"
+                + "  - {constant: X, in: ../src/a.h, equals: c.lsb}\n"
+                + "  - {constant: X, in: ../src/none.h, equals: c.lsb}\n"
+                + "  - {constant: X, in: ../../etc/other.h, equals: c.lsb}\n");
+    String path = "/w/doc/a.channels.yaml";
+    Linked first = read(path).find(path).orElseThrow();
+    assertThat(first.sources().get("../src/a.h").text().orElseThrow().name())
+        .isEqualTo("/w/src/a.h");
+    assertThat(first.sources().get("../src/none.h").why()).isEqualTo("there is no such file");
+    assertThat(first.sources().get("../../etc/other.h").why())
+        .isEqualTo("it lies outside the workspace");
+    assertThat(read(path).find(path)).containsSame(first);
+    files.with("/w/src/a.h", "#define X 2");
+    assertThat(read(path).find(path).orElseThrow()).isNotSameAs(first);
+  }
+
+  @Test
   void discovery_skips_what_is_hidden_built_or_fetched(@TempDir Path folder) throws IOException {
     for (String path :
         List.of(
