@@ -51,7 +51,7 @@ enum Format {
   static final class OfComparison implements CommandLine.ITypeConverter<Format> {
     @Override
     public Format convert(String word) {
-      return of(word, List.of(TEXT, MARKDOWN, JSON));
+      return of(word, List.of(TEXT, MARKDOWN));
     }
   }
 }

@@ -51,6 +51,8 @@ public final class Tool implements Runnable {
     line.addSubcommand(new CheckCommand(console));
     line.addSubcommand(new FiguresCommand(console));
     line.addSubcommand(new ExplainCommand(console));
+    line.addSubcommand(new MendCommand(console));
+    line.addSubcommand(new CompareCommand(console));
     line.addSubcommand(new ServeCommand(console));
     IVersionProvider version = () -> new String[] {"settlewell " + console.version()};
     line.getCommandSpec().versionProvider(version);

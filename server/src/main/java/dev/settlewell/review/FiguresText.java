@@ -10,14 +10,12 @@ import dev.settlewell.channel.Figures;
 import dev.settlewell.sheet.Named;
 import dev.settlewell.unit.Engineering;
 import java.util.List;
-import java.util.stream.Collectors;
 
 /** Figures for people: a heading a channel, a row a figure, no wider than 80 columns. */
 public final class FiguresText {
   private static final int COLUMNS = 80;
   private static final int NAME_COLUMNS = 30;
   private static final int SHARE_COLUMNS = 9;
-  private static final int PLAIN_DIGITS = 6;
   private static final String INDENT = "  ";
 
   private final Locations locations;
@@ -87,7 +85,7 @@ public final class FiguresText {
         figure.at().isPresent() && figure.value().isPresent()
             ? " at " + Engineering.digits(figure.at().getAsDouble(), 3)
             : "";
-    line(INDENT + name + " " + Terminal.line(state(figure)) + at);
+    line(INDENT + name + " " + Terminal.line(FigureWords.state(figure)) + at);
     if (derivations && !figure.formula().isEmpty()) {
       line(INDENT + INDENT + style.faint("= " + Terminal.line(figure.formula())));
       figure.operands().forEach(this::operand);
@@ -100,33 +98,8 @@ public final class FiguresText {
         INDENT.repeat(3)
             + Terminal.padded(Terminal.line(operand.name()), NAME_COLUMNS - 4)
             + " "
-            + value(operand.value(), operand.unit(), false)
+            + FigureWords.value(operand.value(), operand.unit(), false)
             + style.faint(Terminal.line(where)));
-  }
-
-  private static String state(Figure figure) {
-    Figure.State state = figure.state();
-    if (state instanceof Figure.State.Value v) {
-      return value(v.value(), figure.unit(), figure.isShare());
-    }
-    if (state instanceof Figure.State.Missing missing) {
-      return "- lacks "
-          + missing.inputs().stream()
-              .map(Figure.Input::pointer)
-              .collect(Collectors.joining(", "));
-    }
-    if (state instanceof Figure.State.None none) {
-      return "none: " + none.why();
-    }
-    return state instanceof Figure.State.Unlimited
-        ? "unlimited"
-        : "- a value it rests on is wrong";
-  }
-
-  private static String value(double value, String unit, boolean share) {
-    return unit.equals("1") && !share
-        ? Engineering.digits(value, PLAIN_DIGITS)
-        : Engineering.message(value, unit);
   }
 
   private void aliases(ChannelFigures channel) {

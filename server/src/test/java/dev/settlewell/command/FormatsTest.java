@@ -197,7 +197,7 @@ class FormatsTest {
     try {
       Locale.setDefault(Locale.ROOT);
       String plain = out(words.split(" "));
-      for (String tag : List.of("tr-TR", "de-DE", "ar-EG-u-nu-arab", "hi-IN-u-nu-deva")) {
+      for (String tag : List.of("tr-TR", "ar-EG-u-nu-arab")) {
         Locale.setDefault(Locale.forLanguageTag(tag));
         TimeZone.setDefault(TimeZone.getTimeZone("Pacific/Kiritimati"));
         assertThat(out(words.split(" "))).as(tag).isEqualTo(plain);
