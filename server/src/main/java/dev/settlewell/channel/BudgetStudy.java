@@ -13,6 +13,7 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.function.ToDoubleFunction;
 
 /**
  * The error budget of a channel: every reason moved to its limits in the one forward model, at
@@ -21,7 +22,7 @@ import java.util.Set;
 final class BudgetStudy {
   static final double PROBABILITY = 0.95;
 
-  /** Below this share of the hard limit a row is rounding (a supply that cancels), not error. */
+  /** Below this share of the hard limit or the range it is rounding (a supply that cancels). */
   private static final double NOTHING = 1e-12;
 
   private final ChannelModel model;
@@ -127,6 +128,7 @@ final class BudgetStudy {
     double[] one = forward.nominal().clone();
     double[] allUp = forward.nominal().clone();
     double[] allDown = forward.nominal().clone();
+    List<Moved> undecided = new ArrayList<>();
     for (Spread spread : model.spreads()) {
       if (calibratedAway.contains(spread.row())) {
         continue;
@@ -143,12 +145,40 @@ final class BudgetStudy {
       one[i] = kept - minus;
       double down = forward.error(x, one);
       one[i] = kept;
+      rows.add(row(spread, up, down, x));
+      if (isNothing(up) && isNothing(down)) {
+        undecided.add(new Moved(i, plus, minus));
+        continue;
+      }
       boolean rises = up >= down;
       allUp[i] += rises ? plus : -minus;
       allDown[i] += rises ? -minus : plus;
-      rows.add(row(spread, up, down, x));
+    }
+    // What does nothing by itself may do something beside the others: leakage in a resistor.
+    for (Moved moved : undecided) {
+      moved.further(allUp, p -> forward.error(x, p));
+      moved.further(allDown, p -> -forward.error(x, p));
     }
     return Math.max(Math.abs(forward.error(x, allUp)), Math.abs(forward.error(x, allDown)));
+  }
+
+  /** Whether an error is rounding. */
+  private boolean isNothing(double error) {
+    return Math.abs(error) <= NOTHING * model.measures().width();
+  }
+
+  /** A parameter and how far it may move. */
+  private record Moved(int parameter, double plus, double minus) {
+
+    /** Moves it to the end where the error is larger. */
+    void further(double[] p, ToDoubleFunction<double[]> error) {
+      double kept = p[parameter];
+      p[parameter] = kept + plus;
+      double up = error.applyAsDouble(p);
+      p[parameter] = kept - minus;
+      double down = error.applyAsDouble(p);
+      p[parameter] = up >= down ? kept + plus : kept - minus;
+    }
   }
 
   /** A value with stated coverage is moved to three standard uncertainties. */
