@@ -17,82 +17,39 @@ import java.util.List;
  * lose the rest of the file.
  */
 final class BlockScan {
-
-  /** How the entry read last on a level ended, which decides what may stand deeper below it. */
-  private enum Last {
-    /** {@code key:} or {@code -} alone: a deeper block may follow. */
-    OPEN,
-    /** A plain text: deeper lines without a colon go on with it. */
-    PLAIN,
-    /** Anything else: nothing deeper may follow. */
-    CLOSED
-  }
-
-  /** A block mapping or block list that is open. */
-  private static final class Level {
-    final boolean list;
-
-    /** Its column as written. */
-    final int indent;
-
-    /** Its column in the draft. */
-    final int drafted;
-
-    /** Where the column as written is mended, what is told of it; else null. */
-    final Mend mend;
-
-    /** A wrong column that some lines of this level were written at, and its report. */
-    int astray = -1;
-
-    Mend astrayMend;
-    Last last = Last.OPEN;
-
-    Level(boolean list, int indent, int drafted, Mend mend) {
-      this.list = list;
-      this.indent = indent;
-      this.drafted = drafted;
-      this.mend = mend;
-    }
-  }
-
-  /** A wrong indentation; lines that follow it in the same column belong to the same report. */
-  private static final class Mend {
-    final Span span;
-    final String message;
-    final List<Edit> edits = new ArrayList<>();
-
-    Mend(Span span, String message) {
-      this.span = span;
-      this.message = message;
-    }
-  }
-
   private final Mending mending;
   private final Quotes quotes;
   private final Starts starts;
+  private final Shapes shapes;
+  private final LeftOut leftOut;
+  private final DocumentMarks marks;
+  private final BlockValues values;
   private final Deque<Level> levels = new ArrayDeque<>();
-  private final List<Mend> mends = new ArrayList<>();
-  private int number;
+  private final List<Level.Mend> mends = new ArrayList<>();
   private boolean started;
 
   BlockScan(Mending mending) {
     this.mending = mending;
     this.quotes = new Quotes(mending);
     this.starts = new Starts(mending);
+    this.shapes = new Shapes(mending, quotes);
+    this.leftOut = new LeftOut(mending, shapes);
+    this.marks = new DocumentMarks(mending);
+    this.values = new BlockValues(mending, quotes, shapes, this);
   }
 
   void scan() {
     int root = rootIndent();
     levels.push(new Level(false, root, root, null));
-    for (number = 0; number < mending.text.lineCount(); number++) {
-      Row row = behindStart(mending.row(number));
-      if (!mending.empty(row) && !documentMark(row)) {
+    for (mending.line = 0; mending.line < mending.text.lineCount(); mending.line++) {
+      Row row = marks.behindStart(mending.row(mending.line), started);
+      if (!mending.empty(row) && !marks.takesWholeLine(row, started)) {
         line(row);
         started = true;
       }
     }
-    for (Mend mend : mends) {
-      Fix fix = new Fix("Mend the indentation", mend.edits, false);
+    for (Level.Mend mend : mends) {
+      Fix fix = new Fix("Level.Mend the indentation", mend.edits, false);
       mending.problems.add(
           new Problem(
               Problem.Kind.SYNTAX, mending.text.place(mend.span), mend.message, fix));
@@ -131,9 +88,9 @@ final class BlockScan {
         indent(row, top.drafted, top.mend);
       }
       sibling(row, top, top.drafted, top.mend);
-    } else if (popped == null && top.last == Last.OPEN && started) {
+    } else if (popped == null && top.last == Level.Last.OPEN && started) {
       child(row, top);
-    } else if (popped != null || top.last != Last.PLAIN || !isText(row)) {
+    } else if (popped != null || top.last != Level.Last.PLAIN || !shapes.isText(row)) {
       misplaced(row, top, popped);
     }
   }
@@ -155,8 +112,8 @@ final class BlockScan {
 
   /** A line in a column that no open level has: it goes to the nearest. */
   private void misplaced(Row row, Level top, Level popped) {
-    if (isText(row)) {
-      noColon(row, top);
+    if (shapes.isText(row)) {
+      leftOut.noColon(row, top);
       return;
     }
     Level to = top;
@@ -174,7 +131,7 @@ final class BlockScan {
             + ": write "
             + to.indent
             + " blanks before it";
-    Mend mend = new Mend(new Span(row.content(), Math.max(keyEnd(row), row.content())), message);
+    Level.Mend mend = new Level.Mend(new Span(row.content(), Math.max(shapes.keyEnd(row), row.content())), message);
     mends.add(mend);
     to.astray = row.indent();
     to.astrayMend = mend;
@@ -185,70 +142,22 @@ final class BlockScan {
   /** A key that is moved deeper must stay above what it holds. */
   private boolean fitsChildren(Row row, Level level) {
     int next = mending.nextContent(row.number());
-    int colon = colon(row.content(), row.end());
+    int colon = shapes.colon(row.content(), row.end());
     boolean open = colon >= 0 && mending.skipBlanks(colon + 1) >= row.end();
     return !open || next < 0 || mending.row(next).indent() <= row.indent()
         || mending.row(next).indent() > level.indent;
   }
 
-  private void indent(Row row, int indent, Mend mend) {
+  private void indent(Row row, int indent, Level.Mend mend) {
     mending.setIndent(row, indent);
     mend.edits.add(mending.edit(row.start(), row.content(), " ".repeat(indent)));
   }
 
-  private int keyEnd(Row row) {
-    int colon = colon(row.content(), row.end());
-    return colon >= 0 ? colon : mending.beforeComment(row.content(), row.end());
-  }
-
-  // What a line is.
-
-  private boolean isItem(int at) {
-    return mending.draft.at(at) == '-' && mending.gap(at + 1);
-  }
-
-  private boolean isText(Row row) {
-    int at = row.content();
-    return !isItem(at)
-        && !tightItem(at, row.end())
-        && colon(at, row.end()) < 0
-        && mending.tightColon(at, row.end()) < 0;
-  }
-
-  /** {@code -resistor: 1 kΩ}: a dash that lacks its blank. */
-  private boolean tightItem(int at, int end) {
-    char next = mending.draft.at(at + 1);
-    return mending.draft.at(at) == '-' && next >= 'a' && next <= 'z' && colon(at, end) >= 0;
-  }
-
-  /** The colon of the key that stands here; -1 where none does. */
-  private int colon(int at, int end) {
-    char first = mending.draft.at(at);
-    int from = at;
-    if (first == '[' || first == '{') {
-      return -1;
-    }
-    if (first == '"' || first == '\'') {
-      int close = quotes.endOnLine(at, end);
-      int next = close < 0 ? -1 : mending.skipBlanks(close);
-      return close >= 0 && mending.draft.at(next) == ':' && mending.gap(next + 1) ? next : -1;
-    }
-    for (int i = from; i < end; i++) {
-      if (mending.draft.at(i) == ':' && mending.gap(i + 1)) {
-        return i;
-      }
-      if (i > at && mending.comment(i)) {
-        return -1;
-      }
-    }
-    return -1;
-  }
-
   // What stands on a level.
 
-  private void sibling(Row row, Level level, int drafted, Mend mend) {
+  private void sibling(Row row, Level level, int drafted, Level.Mend mend) {
     int at = row.content();
-    boolean item = isItem(at) || tightItem(at, row.end());
+    boolean item = shapes.isItem(at) || shapes.tightItem(at, row.end());
     if (level.list && !item) {
       Level below = below(level);
       if (below != null && below.indent == level.indent && !below.list) {
@@ -258,13 +167,13 @@ final class BlockScan {
         noDash(row, level);
       }
     } else if (!level.list && item) {
-      if (level.last == Last.OPEN) {
-        level.last = Last.CLOSED;
+      if (level.last == Level.Last.OPEN) {
+        level.last = Level.Last.CLOSED;
         Level list = new Level(true, row.indent(), drafted, mend);
         levels.push(list);
         item(row, list, at, drafted, mend);
       } else {
-        dropBlock(row, "a list item stands here where a key is wanted");
+        leftOut.dropBlock(row, "a list item stands here where a key is wanted");
       }
     } else if (item) {
       item(row, level, at, drafted, mend);
@@ -286,12 +195,12 @@ final class BlockScan {
 
   private void child(Row row, Level parent) {
     int at = row.content();
-    boolean item = isItem(at) || tightItem(at, row.end());
-    if (!item && isText(row) && (opens(at) || !keysFollow(row))) {
-      parent.last = value(at, row, parent, "");
+    boolean item = shapes.isItem(at) || shapes.tightItem(at, row.end());
+    if (!item && shapes.isText(row) && (shapes.opens(at) || !keysFollow(row))) {
+      parent.last = values.value(at, row, parent, "");
       return;
     }
-    parent.last = Last.CLOSED;
+    parent.last = Level.Last.CLOSED;
     Level level = new Level(item, row.indent(), row.indent(), null);
     levels.push(level);
     if (item) {
@@ -299,10 +208,6 @@ final class BlockScan {
     } else {
       entry(row, level);
     }
-  }
-
-  private boolean opens(int at) {
-    return "[{\"'".indexOf(mending.draft.at(at)) >= 0;
   }
 
   /** True where a line that looks like a text has keys beside or below it: its colon is missing. */
@@ -313,14 +218,14 @@ final class BlockScan {
       if (below.indent() < row.indent()) {
         return false;
       }
-      if (!isText(below)) {
+      if (!shapes.isText(below)) {
         return below.indent() == row.indent() || next == mending.nextContent(row.number());
       }
     }
     return false;
   }
 
-  private void item(Row row, Level list, int dash, int drafted, Mend mend) {
+  private void item(Row row, Level list, int dash, int drafted, Level.Mend mend) {
     int at = dash;
     Level level = list;
     while (true) {
@@ -334,19 +239,19 @@ final class BlockScan {
       }
       int content = mending.skipBlanks(at + 1);
       if (content >= row.end() || mending.comment(content)) {
-        level.last = Last.OPEN;
+        level.last = Level.Last.OPEN;
         return;
       }
       int column = content - row.content();
-      boolean nested = isItem(content);
+      boolean nested = shapes.isItem(content);
       boolean number = Character.isDigit(mending.draft.at(content)); // `- 1:30` is no key
       boolean key =
-          !nested && (number ? colon(content, row.end()) >= 0 : hasKey(content, row.end()));
+          !nested && (number ? shapes.colon(content, row.end()) >= 0 : shapes.hasKey(content, row.end()));
       if (!nested && !key) {
-        level.last = value(content, row, level, "");
+        level.last = values.value(content, row, level, "");
         return;
       }
-      level.last = Last.CLOSED;
+      level.last = Level.Last.CLOSED;
       Level inner = new Level(nested, row.indent() + column, drafted + column, mend);
       levels.push(inner);
       if (key) {
@@ -358,25 +263,21 @@ final class BlockScan {
     }
   }
 
-  private boolean hasKey(int at, int end) {
-    return colon(at, end) >= 0 || mending.tightColon(at, end) >= 0;
-  }
-
   private void entry(Row row, Level level) {
     int at = row.content();
     char first = mending.draft.at(at);
     if (!started && (first == '{' || first == '[') && holdsAll(at)) {
-      level.last = value(at, row, new Level(false, -1, -1, null), "");
+      level.last = values.value(at, row, new Level(false, -1, -1, null), "");
     } else if (first == '?' && mending.gap(at + 1)) {
-      dropBlock(row, "`?` begins a key that is no word: write `KEY: VALUE`");
+      leftOut.dropBlock(row, "`?` begins a key that is no word: write `KEY: VALUE`");
     } else if (first == ':' && mending.gap(at + 1)) {
-      dropBlock(row, "a key is missing before this colon");
-    } else if (hasKey(at, row.end())) {
+      leftOut.dropBlock(row, "a key is missing before this colon");
+    } else if (shapes.hasKey(at, row.end())) {
       entry(row, level, at);
-    } else if ("[]{}".indexOf(first) >= 0 && hasKey(mending.skipBlanks(at + 1), row.end())) {
+    } else if ("[]{}".indexOf(first) >= 0 && shapes.hasKey(mending.skipBlanks(at + 1), row.end())) {
       strayBracket(row, level);
     } else {
-      noColon(row, level);
+      leftOut.noColon(row, level);
     }
   }
 
@@ -395,15 +296,17 @@ final class BlockScan {
   }
 
   private void entry(Row row, Level level, int at) {
-    int colon = colon(at, row.end());
+    int colon = shapes.colon(at, row.end());
     int tight = mending.tightColon(at, row.end());
     if (tight >= 0 && (colon < 0 || tight < colon)) {
       colon = tight;
       starts.tightColon(at, colon, mending.beforeComment(at, row.end()));
     }
-    String key = mending.slice(at, mending.trimmed(at, colon));
+    boolean quoted = shapes.opens(at);
+    int keyEnd = mending.trimmed(at, colon);
+    String key = quoted ? mending.slice(at + 1, keyEnd - 1) : mending.slice(at, keyEnd);
     int value = mending.skipBlanks(colon + 1);
-    level.last = value(value, row, level, key);
+    level.last = values.value(value, row, level, key);
   }
 
   /** True where the bracket that opens the text is closed at its end: the sheet is one mapping. */
@@ -413,326 +316,33 @@ final class BlockScan {
     return end >= 0 && (next < 0 || mending.draft.at(mending.row(next).content()) == '.');
   }
 
-  /**
-   * {@code ---} before anything else opens the document; a second document is read into the first.
-   */
-  private boolean documentMark(Row row) {
-    if (row.content() != row.start()) {
-      return false;
-    }
-    String line = mending.slice(row.content(), row.end());
-    if (!started && line.startsWith("%")) {
-      return true;
-    }
-    boolean end = line.equals("...");
-    boolean mark = line.equals("---") || line.startsWith("--- ") || end;
-    boolean usual = end ? mending.nextContent(row.number()) < 0 : !started;
-    if (mark && !usual) {
-      mending.syntax(
-          row.content(),
-          row.content() + 3,
-          "`" + line.substring(0, 3) + "` begins another document: a sheet is one",
-          mending.guess("Remove the line", mending.edit(row.start(), nextLineStart(row), "")));
-      mending.draft.blank(row.content(), row.end());
-    }
-    return mark;
-  }
-
-  /** The rest of a line that opens the document and has content too: {@code --- {a: 1}}. */
-  private Row behindStart(Row row) {
-    int content = mending.skipBlanks(row.content() + 3);
-    boolean opens = !started && mending.slice(row.content(), row.end()).startsWith("--- ");
-    if (!opens || mending.draft.at(content) == '#') {
-      return row;
-    }
-    mending.draft.drop(row.content(), content);
-    return new Row(row.number(), row.start(), content, row.end(), 0);
-  }
-
-  private int nextLineStart(Row row) {
-    int next = row.number() + 1;
-    return next < mending.text.lineCount() ? mending.text.lineStart(next) : row.end();
-  }
-
-  // Lines that are left out.
-
-  private void noColon(Row row, Level level) {
-    int at = row.content();
-    int end = mending.beforeComment(at, row.end());
-    int next = mending.nextContent(row.number());
-    boolean holds = next >= 0 && mending.row(next).indent() > row.indent() && word(at, end);
-    Fix fix = mending.guess("Put a colon after it", mending.edit(end, end, ":"));
-    if (holds && row.indent() == level.indent) {
-      mending.syntax(at, end, "a colon is missing: write `" + mending.slice(at, end) + ":`", fix);
-      mending.draft.insert(end, ":");
-      level.last = Last.OPEN;
-      return;
-    }
-    int equals = mending.slice(at, end).indexOf('=');
-    int key = equals < 0 ? end : mending.trimmed(at, at + equals);
-    if (equals > 0 && word(at, key)) {
-      int value = mending.skipBlanks(at + equals + 1);
-      mending.syntax(
-          at,
-          end,
-          "a value stands behind a colon: write `" + mending.slice(at, key) + ": …`",
-          mending.guess("Write a colon", mending.edit(key, Math.min(value, end), ": ")));
-    } else if (word(at, end)) {
-      String written = mending.slice(at, end);
-      mending.syntax(at, end, "`" + written + "` has no colon: write `" + written + ": …`", fix);
-    } else {
-      mending.syntax(at, end, "this line has no key: write `KEY: VALUE`");
-    }
-    mending.draft.blank(at, row.end());
-  }
-
-  private boolean word(int at, int end) {
-    for (int i = at; i < end; i++) {
-      if (!Mending.wordChar(mending.draft.at(i))) {
-        return false;
-      }
-    }
-    return end > at;
-  }
-
+  /** A key in the column of a list's dashes. */
   private void noDash(Row row, Level list) {
     int at = row.content();
     int end = mending.beforeComment(at, row.end());
     Fix fix = mending.guess("Put a dash before it", mending.edit(at, at, "- "));
-    mending.syntax(at, keyEnd(row), "a list item begins with a dash: write `- …`", fix);
-    if (!hasKey(at, row.end())) {
+    mending.syntax(at, shapes.keyEnd(row), "a list item begins with a dash: write `- …`", fix);
+    if (!shapes.hasKey(at, row.end())) {
       mending.draft.blank(at, row.end());
       return;
     }
     mending.draft.insert(at, "- ");
-    list.last = Last.CLOSED;
+    list.last = Level.Last.CLOSED;
     Level inner = new Level(false, row.indent() + 2, list.drafted + 2, null);
     levels.push(inner);
     entry(row, inner, at);
   }
 
-  /** Leaves a line out with all that stands deeper below it. */
-  private void dropBlock(Row row, String message) {
-    mending.syntax(
-        row.content(), mending.beforeComment(row.content(), row.end()), message);
-    mending.draft.blank(row.content(), row.end());
-    int next;
-    while ((next = mending.nextContent(number)) >= 0
-        && mending.row(next).indent() > row.indent()) {
-      Row below = mending.row(next);
-      mending.draft.blank(below.content(), below.end());
-      number = next;
-    }
+  /** Reads a second key on a line as if it stood on the next, one deeper than the first. */
+  void entryBelow(Row row, Level above, int at) {
+    above.last = Level.Last.CLOSED;
+    Level level = new Level(false, above.indent + 1, above.drafted + 1, null);
+    levels.push(level);
+    entry(row, level, at);
   }
 
-  // Values.
-
-  private Last value(int from, Row row, Level level, String key) {
-    int end = row.end();
-    int at = mending.textKeys.contains(key) ? from : behindProperties(from, end);
-    if (at >= end || mending.comment(at)) {
-      return Last.OPEN;
-    }
-    if (mending.textKeys.contains(key)) {
-      return prose(at, row, level);
-    }
-    char c = mending.draft.at(at);
-    if (c == '"' || c == '\'' || c == '[' || c == '{') {
-      int close =
-          c == '"' || c == '\''
-              ? quotes.end(at, level.indent, 0)
-              : new FlowScan(mending, quotes, level.indent).end(at);
-      number = mending.text.lineAt(close);
-      garbage(close, mending.row(number).end());
-      return Last.CLOSED;
-    }
-    if (blockHeader(at, end)) {
-      skipBlock(at, level);
-      return Last.CLOSED;
-    }
-    int text = mending.beforeComment(at, end);
-    if (c == '-' && mending.blank(at + 1)) {
-      starts.dash(at, text);
-    } else if (Starts.cannotBegin(mending, at, text)) {
-      starts.refuse(at, text);
-      return Last.CLOSED;
-    } else if (c == '*') {
-      return Last.CLOSED;
-    } else if (starts.secondColon(at, text) >= 0) {
-      return secondColon(at, text, row, level);
-    }
-    return Last.PLAIN;
-  }
-
-  /** Behind the tags, which are told, and the anchors before a value. */
-  private int behindProperties(int from, int end) {
-    int at = from;
-    while (at < end && (mending.draft.at(at) == '!' || mending.draft.at(at) == '&')) {
-      int next = at;
-      if (mending.draft.at(at) == '!') {
-        next = starts.tag(at);
-      }
-      while (!mending.gap(next)) {
-        next++;
-      }
-      at = mending.skipBlanks(next);
-    }
-    return at;
-  }
-
-  /** {@code sensor: thermistor: …}: the inner key is read as if it stood on the next line. */
-  private Last secondColon(int at, int end, Row row, Level level) {
-    int colon = starts.secondColon(at, end);
-    boolean key = word(at, colon) && Character.isLetter(mending.draft.at(at)) && !level.list;
-    if (!key || levels.size() > TreeBuilder.MAX_DEPTH) {
-      mending.syntax(
-          at,
-          end,
-          "a second colon in one line: a text with `: ` in it stands in quotes",
-          mending.quoteFix(at, end));
-      mending.breakOff(at, end);
-      return Last.CLOSED;
-    }
-    String inner = mending.slice(at, colon);
-    String below = mending.text.lineBreak() + " ".repeat(level.indent + 2);
-    mending.syntax(
-        at,
-        colon,
-        "a second key in one line: write `" + inner + ":` on the line below, indented",
-        mending.guess(
-            "Put `" + inner + "` on a line of its own",
-            mending.edit(mending.trimmed(row.content(), at), at, below)));
-    mending.draft.insert(at, "\n" + " ".repeat(level.drafted + 1));
-    level.last = Last.CLOSED;
-    Level nested = new Level(false, level.indent + 1, level.drafted + 1, null);
-    levels.push(nested);
-    entry(row, nested, at);
-    return Last.CLOSED;
-  }
-
-  private void garbage(int close, int end) {
-    int at = mending.skipBlanks(close);
-    if (at >= end || mending.draft.at(at) == '#') {
-      return;
-    }
-    int to = mending.beforeComment(at, end);
-    String written = mending.slice(at, to);
-    mending.syntax(
-        at,
-        to,
-        "nothing may follow the closing " + mending.slice(close - 1, close) + ": remove this",
-        mending.guess("Remove `" + written + "`", mending.edit(close, to, "")));
-    mending.draft.blank(at, to);
-  }
-
-  private boolean blockHeader(int at, int end) {
-    char c = mending.draft.at(at);
-    if (c != '|' && c != '>') {
-      return false;
-    }
-    int i = at + 1;
-    while (i < end && "+-123456789".indexOf(mending.draft.at(i)) >= 0 && i < at + 3) {
-      i++;
-    }
-    return i == end || mending.gap(i) && mending.comment(mending.skipBlanks(i));
-  }
-
-  /** A block text goes on as deep as its first line, or as deep as its header says. */
-  private void skipBlock(int at, Level level) {
-    int indent = 0;
-    for (int i = at + 1; i <= at + 2; i++) {
-      char digit = mending.draft.at(i);
-      indent = digit >= '1' && digit <= '9' ? level.indent + digit - '0' : indent;
-    }
-    int last = number;
-    for (int next = number + 1; next < mending.text.lineCount(); next++) {
-      Row row = mending.row(next);
-      if (row.content() < row.end()) {
-        indent = indent == 0 ? Math.max(row.indent(), level.indent + 1) : indent;
-        if (row.indent() < indent) {
-          break;
-        }
-        last = next;
-      }
-    }
-    number = last;
-    mending.verbatim.add(new Span(at, mending.row(last).end()));
-  }
-
-  /** The value of a key that holds prose: what YAML would not read to its end is read in quotes. */
-  private Last prose(int at, Row row, Level level) {
-    char c = mending.draft.at(at);
-    int end = row.end();
-    if (c == '"' || c == '\'') {
-      int close = quotes.endOnLine(at, end);
-      int next = close < 0 ? end : mending.skipBlanks(close);
-      if (close < 0 || next >= end || mending.comment(next)) {
-        return value(at, row, level, "");
-      }
-    }
-    if (blockHeader(at, end) || c == '*' && !Starts.cannotBegin(mending, at, end)) {
-      return value(at, row, level, "");
-    }
-    int stop = mending.beforeComment(at, end);
-    if ((c == '[' || c == '{') && wholeFlow(at, level)) {
-      return value(at, row, level, "");
-    }
-    if (c == '&' && !starts.misread(at, stop)) {
-      return value(at, row, level, "");
-    }
-    if (starts.misread(at, stop)) {
-      quoteProse(at, c, lastLineOf(stop, row, level));
-      return Last.CLOSED;
-    }
-    int hash = stop < end ? mending.skipBlanks(stop) : end;
-    if (hash < end && hash == stop + 1 && !mending.gap(hash + 1)) {
-      mending.ambiguous(
-          hash,
-          end,
-          "YAML cuts the text here, at ` #`: put it in quotes, or write `# ` before a comment",
-          new Fix(
-              "Put the text in quotes",
-              mending.quoteFix(at, end).edits(),
-              false));
-    }
-    return Last.PLAIN;
-  }
-
-  private void quoteProse(int at, char first, int end) {
-    Fix fix = mending.quote(at, end);
-    if (first == '!' || first == '&') {
-      String what = first == '!' ? "a tag" : "an anchor";
-      mending.ambiguous(
-          at, end, "YAML takes the first word for " + what + ": put the text in quotes", fix);
-    } else {
-      mending.syntax(at, end, "YAML cannot read this text as it stands: put it in quotes", fix);
-    }
-  }
-
-  /** Prose may go on over deeper lines; it is quoted to its end. */
-  private int lastLineOf(int end, Row row, Level level) {
-    int stop = end;
-    int last = row.number();
-    while (stop >= mending.row(last).end() && last + 1 < mending.text.lineCount()) {
-      Row next = mending.row(last + 1);
-      if (mending.empty(next) || next.indent() <= level.indent || !isText(next)) {
-        break;
-      }
-      last++;
-      stop = mending.beforeComment(next.content(), next.end());
-    }
-    number = last;
-    return stop;
-  }
-
-  /** True for a closed list or mapping: not prose, and for the reader of the tree to judge. */
-  private boolean wholeFlow(int at, Level level) {
-    int end = quotes.balanced(at, level.indent);
-    if (end < 0) {
-      return false;
-    }
-    int lineEnd = mending.row(mending.text.lineAt(end)).end();
-    int next = mending.skipBlanks(end);
-    return next >= lineEnd || mending.draft.at(next) == '#';
+  /** How many levels are open. */
+  int depth() {
+    return levels.size();
   }
 }

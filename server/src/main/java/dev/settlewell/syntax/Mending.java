@@ -30,6 +30,9 @@ final class Mending {
   /** Lists, mappings and quoted texts that can only be taken out as a whole. */
   final List<Span> wholes = new ArrayList<>();
 
+  /** The line that is being read; a value that goes on over lines moves it to its last. */
+  int line;
+
   private final int[] indents;
 
   Mending(SourceText text, Set<String> textKeys) {
