@@ -1,6 +1,7 @@
 package dev.settlewell.sheet;
 
 import dev.settlewell.syntax.SyntaxTree;
+import dev.settlewell.text.Place;
 import dev.settlewell.text.Problem;
 import dev.settlewell.text.SourceText;
 import dev.settlewell.unit.Toleranced;
@@ -15,6 +16,7 @@ import java.util.Map;
  * tolerance (or no drift) has the default's.
  *
  * @param top the keys of the top level
+ * @param uncomputed keys that the format has and that nothing is computed from yet
  */
 public record Sheet(
     SourceText text,
@@ -25,7 +27,8 @@ public record Sheet(
     Map<String, Named<Part>> scans,
     Map<String, Named<Part>> interferers,
     Map<String, Named<Part>> channels,
-    List<Problem> problems) {
+    List<Problem> problems,
+    List<Place> uncomputed) {
 
   public String path() {
     return text.name();

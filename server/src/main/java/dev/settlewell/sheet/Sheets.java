@@ -42,7 +42,8 @@ public final class Sheets {
         named(top, NameKind.SCAN, Part.class, places),
         named(top, NameKind.INTERFERER, Part.class, places),
         named(top, NameKind.CHANNEL, Part.class, places),
-        report.sorted());
+        report.sorted(),
+        new Uncomputed(vocabulary).keys(top));
   }
 
   private static Map<NameKind, Map<String, Place>> places(List<Binder.Definition> definitions) {

@@ -77,7 +77,8 @@ final class StandIn implements Desk {
     SyntaxTree tree = new SyntaxTree(text, root, List.of(), List.of());
     Sheet sheet =
         new Sheet(
-            text, tree, null, Map.of(), Map.of(), Map.of(), Map.of(), Map.of(), List.of());
+            text, tree, null, Map.of(), Map.of(), Map.of(), Map.of(), Map.of(), List.of(),
+            List.of());
     Linked linked =
         new Linked(
             sheet, List.of(), Map.of(), Map.of(), Map.of(), List.of(), LocalDate.of(2026, 1, 1));

@@ -48,7 +48,7 @@ final class AccumulatorOverflows extends ChannelCheck {
             .need(Words.count(needed) + " bits")
             .have(Words.count(stated) + " bits")
             .margin(Words.count(stated - needed) + " bits")
-            .related(channel.place("average"), "codes in a sum")
+            .related(channel.stated("average"), "codes in a sum")
             .candidate(
                 Rewriting.fix(
                     channel.text(),

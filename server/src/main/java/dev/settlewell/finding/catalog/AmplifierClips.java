@@ -39,21 +39,21 @@ final class AmplifierClips extends ChannelCheck {
 
   private Finding finding(
       ChannelView channel, OutputRange output, double low, double high, boolean nominal) {
-    String have = Words.range(output.swingLow(), output.swingHigh(), "V");
-    String need = Words.range(low, high, "V");
+    String swing = Words.range(output.swingLow(), output.swingHigh(), "V");
+    String reached = Words.range(low, high, "V");
     String message =
         "the output must go from %s%s and can go from %s; %s"
-            .formatted(need, nominal ? "" : " with all tolerances", have, mend(output, low, high));
+            .formatted(reached, nominal ? "" : " with all tolerances", swing, mend(output, low, high));
     return FindingBuilder.of(this, output.place(), channel.name())
         .severity(nominal ? Severity.ERROR : Severity.WARNING)
         .about(label(channel, output))
         .message(message)
-        .need(need)
-        .have(have)
+        .need("within " + swing)
+        .have(reached)
         .margin(
             Words.of(Math.min(output.swingHigh() - high, low - output.swingLow()), "V"))
         .related(output.swingPlace(), "what the output can reach")
-        .related(channel.place("measures"), "what is measured")
+        .related(channel.stated("measures"), "what is measured")
         .build();
   }
 

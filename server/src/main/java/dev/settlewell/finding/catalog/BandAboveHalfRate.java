@@ -49,7 +49,7 @@ final class BandAboveHalfRate extends ChannelCheck {
             .have(Words.of(rate, "Hz"))
             .margin(Words.of(rate - 2 * band, "Hz"))
             .related(channel.scan().map(scan -> scan.slot("rate").place()), "the scan's rate")
-            .related(channel.place("average"), "results a mean")
+            .related(channel.stated("average"), "results a mean")
             .candidate(faster(channel, 1.05 * factor * scanRate))
             .build());
   }

@@ -61,6 +61,18 @@ record ChannelView(Analysis analysis, ChannelFigures figures, Part part) {
     return slot.isMissing() ? figures.channel().place() : slot.place();
   }
 
+  /** The key itself where it is stated, the channel's name where it is not: never a whole block. */
+  Place keyPlace(String key) {
+    return part.slot(key) instanceof Slot.Stated<?> stated
+        ? stated.keyPlace()
+        : figures.channel().place();
+  }
+
+  /** Where the value of a key stands; empty where it does not stand anywhere. */
+  Optional<Place> stated(String key) {
+    return has(key) ? Optional.of(place(key)) : Optional.empty();
+  }
+
   boolean has(String key) {
     return part.has(key);
   }

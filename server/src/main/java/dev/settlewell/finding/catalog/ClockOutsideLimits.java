@@ -6,7 +6,9 @@ import dev.settlewell.finding.Check;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
 import dev.settlewell.sheet.Part;
+import dev.settlewell.unit.Engineering;
 import dev.settlewell.unit.Range;
+import java.math.RoundingMode;
 import java.util.Optional;
 import java.util.function.Consumer;
 
@@ -55,19 +57,21 @@ final class ClockOutsideLimits implements Check {
             : "the clock falls to %s, its limit is %s".formatted(hz(low), hz(limits.low()));
     double nominal = part.quantity("clock").stated().get().value();
     double would = tooFast ? nominal * limits.high() / high : nominal * limits.low() / low;
+    String value =
+        Engineering.rounded(would, 3, tooFast ? RoundingMode.FLOOR : RoundingMode.CEILING, "Hz");
     String mend = tooFast ? " at most " : " at least ";
     report.accept(
         FindingBuilder.of(this, part.slot("clock").place(), converter.converter().name())
-            .message(message + "; with this tolerance" + mend + hz(would) + " keeps inside")
-            .need(Words.range(limits.low(), limits.high(), "Hz"))
+            .message(message + "; with this tolerance" + mend + value + " keeps inside")
+            .need("within " + Words.range(limits.low(), limits.high(), "Hz"))
             .have(Words.range(low, high, "Hz"))
             .related(part.slot("clock-limits").place(), "the limits")
             .candidate(
                 Rewriting.fix(
                     analysis.linked().sheet().text(),
                     part.slot("clock"),
-                    Words.part(would, "Hz"),
-                    "Set the clock to " + Words.part(would, "Hz")))
+                    value,
+                    "Set the clock to " + value))
             .build());
   }
 

@@ -70,8 +70,8 @@ final class ConverterOvercommitted implements Check {
         FindingBuilder.of(this, converter.converter().place(), converter.converter().name())
             .severity(tooMuch ? Severity.ERROR : Severity.INFORMATION)
             .message(message)
-            .need(Words.share(use))
-            .have(Words.share(1))
+            .need("at most " + Words.share(1))
+            .have(Words.share(use))
             .margin(Words.share(1 - use));
     for (ScanFigures scan : scans) {
       double share = scan.figures().value("scan-utilisation").orElse(Double.NaN);

@@ -3,6 +3,9 @@ package dev.settlewell.finding.catalog;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
 import dev.settlewell.sheet.Part;
+import dev.settlewell.text.Fix;
+import dev.settlewell.unit.PreferredValues;
+import dev.settlewell.unit.PreferredValues.Series;
 import java.util.Optional;
 import java.util.function.Consumer;
 
@@ -35,6 +38,7 @@ final class FilterDroop extends ChannelCheck {
     if (!(droop > ALLOWED) && !tooMuch) {
       return;
     }
+    double share = tooMuch ? Math.min(ALLOWED, allowed / amplitude) : ALLOWED;
     String lost =
         Double.isNaN(amplitude)
             ? ""
@@ -42,18 +46,45 @@ final class FilterDroop extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "band")
             .message(
-                "%s of the signal is lost at the band's edge of %s%s; the corner of the path lies at %s"
+                "%s of the signal is lost at the band's edge of %s%s; the corner of the path lies at %s, a first-order one would have to be at %s"
                     .formatted(
                         Words.share(droop),
                         Words.of(channel.number("band"), "Hz"),
                         lost,
-                        Words.of(channel.number("corner-frequency"), "Hz")))
+                        Words.of(channel.number("corner-frequency"), "Hz"),
+                        Words.of(corner(channel, share), "Hz")))
+            .candidate(smallerCapacitor(channel, share))
             .need(
                 tooMuch ? "at most " + Words.of(allowed, channel.unit()) : Words.share(ALLOWED))
             .have(Words.share(droop))
-            .related(channel.place("average"), "the average takes its part")
+            .related(channel.stated("average"), "the average takes its part")
             .related(channel.lastStage("capacitor").map(s -> s.part().place()), "the capacitor")
             .build());
+  }
+
+  /** Where a first-order low-pass loses the given share at the band's edge. */
+  private static double corner(ChannelView channel, double share) {
+    double gain = 1 - share;
+    return channel.number("band") / Math.sqrt(1 / (gain * gain) - 1);
+  }
+
+  private static Optional<Fix> smallerCapacitor(ChannelView channel, double share) {
+    Optional<Part> capacitor = channel.lastStage("capacitor").map(ChannelView.Stage::part);
+    double present =
+        capacitor
+            .flatMap(part -> part.quantity("value").stated())
+            .map(quantity -> quantity.value())
+            .orElse(Double.NaN);
+    double needed = present * channel.number("corner-frequency") / corner(channel, share);
+    if (!(needed < present)) {
+      return Optional.empty();
+    }
+    String value = Words.part(PreferredValues.nextLower(Series.E6, needed), "F");
+    return Rewriting.fix(
+        channel.text(),
+        capacitor.get().slot("value"),
+        value,
+        "Raise the corner with " + value + " at the pin");
   }
 
   private static double amplitude(ChannelView channel) {

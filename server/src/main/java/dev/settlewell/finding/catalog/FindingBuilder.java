@@ -8,11 +8,14 @@ import dev.settlewell.text.Fix;
 import dev.settlewell.text.Place;
 import dev.settlewell.text.Related;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 
 /** Puts a finding together piece by piece; what is not said stays empty. */
 final class FindingBuilder {
+  private static final List<String> FIRST = List.of("need", "have", "margin");
+
   private final Check check;
   private final Place place;
   private final String subject;
@@ -79,6 +82,12 @@ final class FindingBuilder {
     return this;
   }
 
+  /** What is needed comes first, then what there is, whatever the order they were told in. */
+  private static int rank(String label) {
+    int rank = FIRST.indexOf(label);
+    return rank < 0 ? FIRST.size() : rank;
+  }
+
   FindingBuilder related(Optional<Place> other, String role) {
     other.ifPresent(there -> related(there, role));
     return this;
@@ -95,6 +104,7 @@ final class FindingBuilder {
   }
 
   Finding build() {
+    facts.sort(Comparator.comparingInt(fact -> rank(fact.label())));
     return new Finding(
         check.name(),
         severity,

@@ -3,10 +3,12 @@ package dev.settlewell.finding.catalog;
 import dev.settlewell.channel.Alias;
 import dev.settlewell.finding.Check;
 import dev.settlewell.finding.Finding;
+import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.function.Consumer;
 import java.util.function.Predicate;
 
@@ -23,7 +25,7 @@ final class Interference {
     Map<String, List<Alias>> byInterferer = new LinkedHashMap<>();
     for (Alias alias : channel.figures().aliases()) {
       if (concerns.test(alias) && alias.amplitudeMeasured() > channel.noticeable()) {
-        byInterferer.computeIfAbsent(alias.interferer(), name -> new java.util.ArrayList<>()).add(alias);
+        byInterferer.computeIfAbsent(alias.interferer(), name -> new ArrayList<>()).add(alias);
       }
     }
     byInterferer.values().forEach(lines -> report.accept(finding(check, lines, tells)));
@@ -37,14 +39,16 @@ final class Interference {
             + " ("
             + Words.lsb(worst.amplitudeLsb())
             + ")";
+    InterferenceRemedies remedies = new InterferenceRemedies(channel, worst);
     String message =
-        "%s at %s %s with an amplitude of %s; %s would be small enough: lower the corner in front of the pin, average over whole periods of it, or change the rate"
+        "%s at %s %s with an amplitude of %s; %s would be small enough: %s"
             .formatted(
                 line(worst),
                 Words.of(worst.frequency(), "Hz"),
                 tells.formatted(landing(worst)),
                 amplitude,
-                Words.of(channel.noticeable(), channel.unit()));
+                Words.of(channel.noticeable(), channel.unit()),
+                remedies.told());
     FindingBuilder finding =
         FindingBuilder.of(check, worst.place(), channel.name())
             .about(worst.interferer())
@@ -58,9 +62,10 @@ final class Interference {
             line(line), landing(line) + ", " + Words.of(line.amplitudeMeasured(), channel.unit()));
       }
     }
+    remedies.fixes().forEach(fix -> finding.candidate(Optional.of(fix)));
     return finding
         .related(channel.scan().map(scan -> scan.slot("rate").place()), "the scan's rate")
-        .related(channel.place("average"), "the average")
+        .related(channel.stated("average"), "the average")
         .build();
   }
 

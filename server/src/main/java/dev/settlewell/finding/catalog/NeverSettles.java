@@ -40,10 +40,10 @@ final class NeverSettles extends ChannelCheck {
     if (!settling.exceeds() || settling.mend() != SettlingJudgement.Mend.NEITHER) {
       return;
     }
+    Optional<String> largest = settling.sourceResistance();
     String would =
-        settling
-            .sourceResistance()
-            .map(largest -> "the source resistance would have to be at most " + largest)
+        largest
+            .map(ohms -> "the source resistance would have to be at most " + ohms)
             .orElse("only a lower rate, or an amplifier in front of the pin, would");
     String message =
         "%s stay unsettled after %s, and neither a longer acquisition nor a larger capacitor at the pin mends it; %s"
@@ -53,7 +53,7 @@ final class NeverSettles extends ChannelCheck {
             .begin(this, channel.place("acquisition"))
             .severity(Severity.ERROR)
             .message(message)
-            .need(would)
+            .need(largest.map(ohms -> "at most " + ohms).orElse("another source"))
             .fact("acquisition", why(channel, "required-acquisition"))
             .fact("reservoir", why(channel, "smallest-reservoir"))
             .candidate(lowerResistor(channel, settling))

@@ -37,7 +37,7 @@ final class NoAntiAliasFilter extends ChannelCheck {
             ? "the path has no pole"
             : "the path's corner lies at " + Words.of(corner, "Hz");
     report.accept(
-        FindingBuilder.of(this, channel, "path")
+        FindingBuilder.of(this, channel.keyPlace("path"), channel.name())
             .message(
                 "%s, above half the scan rate of %s: whatever disturbs the sensor folds into the readings; filter below it, average, or say `interferers: []` where there are none"
                     .formatted(where, Words.of(half, "Hz")))

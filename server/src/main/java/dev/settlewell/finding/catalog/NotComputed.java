@@ -41,6 +41,24 @@ final class NotComputed implements Check {
       byName.computeIfAbsent(channel.name(), name -> new ArrayList<>()).add(channel);
     }
     byName.values().forEach(scans -> check(analysis, scans, report));
+    for (Place key : analysis.linked().sheet().uncomputed()) {
+      report.accept(notYet(analysis, byName, key));
+    }
+  }
+
+  private Finding notYet(
+      Analysis analysis, Map<String, List<ChannelView>> channels, Place key) {
+    String subject =
+        channels.entrySet().stream()
+            .filter(e -> e.getValue().get(0).part().place().span().contains(key.span()))
+            .map(Map.Entry::getKey)
+            .findFirst()
+            .orElse("");
+    String name = analysis.linked().sheet().text().slice(key.span());
+    return FindingBuilder.of(this, key, subject)
+        .about(name)
+        .message("`%s` is read, and nothing is computed from it yet".formatted(name))
+        .build();
   }
 
   private void check(Analysis analysis, List<ChannelView> scans, Consumer<Finding> report) {

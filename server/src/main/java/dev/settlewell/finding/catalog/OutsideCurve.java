@@ -39,9 +39,9 @@ final class OutsideCurve extends ChannelCheck {
                     .formatted(
                         Words.range(measures.get().low(), measures.get().high(), unit),
                         Words.range(low, high, unit)))
-            .need(Words.range(measures.get().low(), measures.get().high(), unit))
-            .have(Words.range(low, high, unit))
-            .related(channel.place("sensor"), "the sensor")
+            .need("within " + Words.range(low, high, unit))
+            .have(Words.range(measures.get().low(), measures.get().high(), unit))
+            .related(channel.sensor().map(sensor -> sensor.keyPlace()), "the sensor")
             .build());
   }
 }

@@ -60,8 +60,8 @@ final class PinOverstressed extends ChannelCheck {
                             : Words.of(worst, "A"),
                         Words.of(allowed, "A"),
                         mend))
-            .need(Words.of(worst, "A"))
-            .have(Words.of(allowed, "A"))
+            .need("at most " + Words.of(allowed, "A"))
+            .have(Words.of(worst, "A"))
             .margin(Words.of(allowed - worst, "A"))
             .related(
                 channel.converter().map(converter -> converter.slot("clamp-current").place()),

@@ -48,13 +48,13 @@ final class ReservoirTooSmall extends ChannelCheck {
     String message =
         "%s%s unsettled after %s, and no acquisition that fits mends it; needs at least %s at the pin"
             .formatted(present, Words.lsb(settling.error()), settling.have(), needed);
-    Place place = reservoir.map(Slot::place).orElse(channel.place("path"));
+    Place place = reservoir.map(Slot::place).orElse(channel.keyPlace("path"));
     report.accept(
         settling
             .begin(this, place)
             .message(message)
             .need(needed)
-            .related(channel.place("acquisition"), "the acquisition")
+            .related(channel.stated("acquisition"), "the acquisition")
             .candidate(reservoir.flatMap(slot -> larger(channel, slot, part)))
             .build());
   }

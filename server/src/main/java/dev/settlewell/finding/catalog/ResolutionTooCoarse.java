@@ -39,13 +39,14 @@ final class ResolutionTooCoarse extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "resolution")
             .message(
-                "one step of the reported value is %s, %s are asked for: %s times the gain, or %s more bits, would do"
+                "one step of the reported value is %s, %s are asked for: %s times the gain, or %s more %s, would do"
                     .formatted(
                         Words.of(step, unit),
                         Words.of(wanted, unit),
                         Words.digits(step / wanted),
-                        Words.count(bits)))
-            .need(Words.of(wanted, unit))
+                        Words.count(bits),
+                        bits == 1 ? "bit" : "bits"))
+            .need("at most " + Words.of(wanted, unit))
             .have(Words.of(step, unit))
             .margin(Words.of(wanted - step, unit))
             .related(

@@ -36,4 +36,23 @@ final class Rewriting {
   static Optional<Fix> fix(SourceText text, Slot<?> slot, String value, String title) {
     return nominal(text, slot, value).map(edit -> new Fix(title, List.of(edit), false));
   }
+
+  /**
+   * Puts {@code key: value} on a line of its own below a neighbour in the same mapping; nothing
+   * where the neighbour does not stand on a line of its own.
+   */
+  static Optional<Edit> lineBelow(SourceText text, Slot<?> neighbour, String key, String value) {
+    if (!(neighbour instanceof Slot.Stated<?> stated)
+        || !stated.place().sheet().equals(text.name())) {
+      return Optional.empty();
+    }
+    Span line = text.line(text.lineAt(stated.place().start()));
+    String head = text.slice(new Span(line.start(), stated.keyPlace().start()));
+    String tail = text.slice(new Span(Math.min(stated.place().end(), line.end()), line.end()));
+    if (!head.isBlank() || !tail.matches("\\s*(#.*)?")) {
+      return Optional.empty();
+    }
+    String added = text.lineBreak() + head + key + ": " + value;
+    return Optional.of(new Edit(text.place(Span.at(line.end())), added));
+  }
 }

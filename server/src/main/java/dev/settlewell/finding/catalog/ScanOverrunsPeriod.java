@@ -61,8 +61,8 @@ final class ScanOverrunsPeriod implements Check {
                 "the scan takes %s at the slowest clock, its period is %s; %s is the highest rate that fits"
                     .formatted(
                         Words.of(time, "s"), Words.of(period(scan), "s"), rate))
-            .need(Words.of(time, "s"))
-            .have(Words.of(period(scan), "s"))
+            .need("at most " + Words.of(period(scan), "s"))
+            .have(Words.of(time, "s"))
             .margin(Words.of(period(scan) - time, "s"))
             .related(part.slot("order").place(), "the order that is gone through")
             .candidate(slower(analysis, part, rate))

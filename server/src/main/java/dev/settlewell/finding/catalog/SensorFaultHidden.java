@@ -3,6 +3,8 @@ package dev.settlewell.finding.catalog;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
 import dev.settlewell.channel.Figure;
+import dev.settlewell.sheet.Part;
+import dev.settlewell.text.Place;
 import java.util.Optional;
 import java.util.function.Consumer;
 
@@ -51,11 +53,16 @@ final class SensorFaultHidden extends ChannelCheck {
             : "%s leaves the pin without a defined code (%s); a resistor that pulls the node out of the measured range makes the fault visible"
                 .formatted(what, undetermined.get());
     FindingBuilder finding =
-        FindingBuilder.of(this, channel, "sensor").about(fault).message(message);
+        FindingBuilder.of(this, place(channel), channel.name()).about(fault).message(message);
     if (!Double.isNaN(low)) {
       finding.need("outside codes " + codes);
     }
     report.accept(
         finding.have(inside ? "code " + Words.count(value) : "undetermined").build());
+  }
+
+  /** The kind of the sensor: the key that says what may break. */
+  private static Place place(ChannelView channel) {
+    return channel.sensor().map(Part::keyPlace).orElse(channel.place("sensor"));
   }
 }

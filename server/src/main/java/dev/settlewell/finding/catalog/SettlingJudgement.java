@@ -88,11 +88,17 @@ final class SettlingJudgement {
       finding.related(
           operand.place(), operand.name() + " " + Words.of(operand.value(), operand.unit()));
     }
+    channel
+        .converter()
+        .filter(part -> part.has("hold-capacitor"))
+        .ifPresent(
+            part -> finding.related(part.slot("hold-capacitor").place(), "the hold capacitor"));
     return finding;
   }
 
+  /** The resistances that feed the pin, the largest first. */
   private List<Figure.Operand> operands() {
-    return channel.figure("settling-error").map(Figure::operands).orElse(List.of());
+    return channel.figure("source-resistance").map(Figure::operands).orElse(List.of());
   }
 
   String have() {

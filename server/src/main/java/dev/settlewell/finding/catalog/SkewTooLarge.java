@@ -39,7 +39,7 @@ final class SkewTooLarge extends ChannelCheck {
                 "%s lie between the samples of %s and %s, %s are allowed; put them side by side in the order, or shorten what lies between"
                     .formatted(
                         Words.of(skew, "s"), channel.name(), other, Words.of(allowed, "s")))
-            .need(Words.of(allowed, "s"))
+            .need("at most " + Words.of(allowed, "s"))
             .have(Words.of(skew, "s"))
             .margin(Words.of(allowed - skew, "s"))
             .related(channel.scan().map(scan -> scan.slot("order").place()), "the order")

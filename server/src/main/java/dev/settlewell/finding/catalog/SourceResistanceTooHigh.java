@@ -74,6 +74,6 @@ final class SourceResistanceTooHigh extends ChannelCheck {
             .filter(operand -> operand.unit().equals("Ω") && operand.place().isPresent())
             .max(Comparator.comparingDouble(Figure.Operand::value))
             .flatMap(Figure.Operand::place);
-    return largest.orElse(channel.place("path"));
+    return largest.orElse(channel.keyPlace("path"));
   }
 }

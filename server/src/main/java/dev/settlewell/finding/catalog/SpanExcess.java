@@ -32,28 +32,33 @@ final class SpanExcess {
     double span = channel.number("span-" + end);
     double share = channel.number("pin-share-worst-" + end);
     double full = channel.number("full-scale");
-    if (beyond((nominal - span) / full)) {
+    double halfLsb = channel.number("lsb") / full / 2;
+    if (beyond((nominal - span) / full, SAME)) {
       report.accept(finding(check, Severity.ERROR, nominal, span, ""));
-    } else if (beyond(above ? share - 1 : share)) {
+    } else if (beyond(above ? share - 1 : share, halfLsb)) {
       double worst = span + (above ? share - 1 : share) * full;
       report.accept(finding(check, Severity.WARNING, worst, span, " with all tolerances"));
     }
   }
 
-  /** A range that ends exactly where the span does is meant to; its last bit is no excess. */
-  private boolean beyond(double shareOutside) {
-    return above ? shareOutside > SAME : shareOutside < -SAME;
+  /**
+   * A range that ends exactly where the span does is meant to, so its last bit is no excess; with
+   * tolerances half an LSB is none, for it reads as the same code.
+   */
+  private boolean beyond(double shareOutside, double tolerated) {
+    return above ? shareOutside > tolerated : shareOutside < -tolerated;
   }
 
   private Finding finding(
       Check check, Severity severity, double voltage, double limit, String tolerances) {
     double excess = Math.abs(voltage - limit);
     String message =
-        "the pin %s %s%s, the span ends at %s: %s %s; %s"
+        "the pin %s %s%s, the span %s at %s: %s %s; %s"
             .formatted(
                 above ? "reaches" : "falls to",
                 volts(voltage),
                 tolerances,
+                above ? "ends" : "starts",
                 volts(limit),
                 volts(excess),
                 above ? "read as full scale" : "read as code 0",
@@ -61,8 +66,8 @@ final class SpanExcess {
     return FindingBuilder.of(check, channel, "measures")
         .severity(severity)
         .message(message)
-        .need(volts(voltage))
-        .have(volts(limit))
+        .need((above ? "at most " : "at least ") + volts(limit))
+        .have(volts(voltage))
         .margin(volts(above ? limit - voltage : voltage - limit))
         .related(
             channel.converter().map(part -> part.slot("reference").place()),

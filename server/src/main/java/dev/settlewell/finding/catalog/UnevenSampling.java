@@ -2,6 +2,9 @@ package dev.settlewell.finding.catalog;
 
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
+import dev.settlewell.sheet.Slot;
+import dev.settlewell.text.Place;
+import java.util.List;
 import java.util.function.Consumer;
 
 /** A channel that stands several times in an order, at unequal distances. */
@@ -43,15 +46,24 @@ final class UnevenSampling extends ChannelCheck {
                         .formatted(Words.of(band, "Hz"), Words.of(rate, "Hz"))
                     : "");
     report.accept(
-        FindingBuilder.of(
-                this,
-                channel.scan().map(s -> s.slot("order").place()).orElse(channel.place("band")),
-                channel.name())
+        FindingBuilder.of(this, secondVisit(channel), channel.name())
             .severity(fast ? Severity.WARNING : Severity.INFORMATION)
             .message(message)
             .need("within " + Words.share(EVEN))
             .have(Words.share(off))
-            .related(channel.place("band"), "the band")
+            .related(channel.stated("band"), "the band")
             .build());
+  }
+
+  /** Where the order names the channel for the second time. */
+  private static Place secondVisit(ChannelView channel) {
+    List<Place> visits =
+        channel.scan().stream()
+            .flatMap(scan -> scan.list("order", String.class).stated().stream())
+            .flatMap(List::stream)
+            .filter(item -> item.stated().filter(channel.name()::equals).isPresent())
+            .map(Slot::place)
+            .toList();
+    return visits.size() > 1 ? visits.get(1) : channel.figures().channel().place();
   }
 }
