@@ -1,5 +1,6 @@
 package dev.settlewell.finding;
 
+import dev.settlewell.channel.Analysis;
 import dev.settlewell.channel.Analyzer;
 import dev.settlewell.text.SourceText;
 import dev.settlewell.vocabulary.Vocabulary;
@@ -31,12 +32,19 @@ record Judged(SourceText text, List<Finding> findings) {
     return on(TODAY, Map.of(PATH, content, "/plant/" + otherName, other));
   }
 
-  private static Judged on(LocalDate date, Map<String, String> files) {
+  static Analysis analysis(String content) {
+    return analysis(TODAY, Map.of(PATH, content));
+  }
+
+  private static Analysis analysis(LocalDate date, Map<String, String> files) {
     Workspace workspace =
         Workspace.read(List.of(PATH), new Files(files), date, new Memo(VOCABULARY));
+    return Analyzer.analyze(workspace.find(PATH).orElseThrow());
+  }
+
+  private static Judged on(LocalDate date, Map<String, String> files) {
     return new Judged(
-        SourceText.of(PATH, files.get(PATH)),
-        Findings.of(Analyzer.analyze(workspace.find(PATH).orElseThrow())));
+        SourceText.of(PATH, files.get(PATH)), Findings.of(analysis(date, files)));
   }
 
   private record Files(Map<String, String> texts) implements SheetReader {
