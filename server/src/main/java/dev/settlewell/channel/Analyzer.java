@@ -14,6 +14,7 @@ import java.util.Optional;
 public final class Analyzer {
   private final Linked linked;
   private final Map<String, ScanTiming> timings = new LinkedHashMap<>();
+  private final Map<String, String> faults = new LinkedHashMap<>();
 
   private Analyzer(Linked linked) {
     this.linked = linked;
@@ -139,6 +140,10 @@ public final class Analyzer {
             new ChannelAnalysis(model, timing, neighbours.pins().get(name))
                 .run(Optional.of(neighbours.settling(model, timing))));
       }
+      if (faults.containsKey(name)) {
+        Named<Part> channel = linked.sheet().channels().get(name);
+        channels.put(name, faulty(channel, Optional.of(scan), Optional.of(timing.converter())));
+      }
     }
     return new ScanFigures(
         scan, new Figures(TimingFigures.ofScan(timing, others(timing))), channels);
@@ -147,11 +152,42 @@ public final class Analyzer {
   private void model(String name, Named<Part> converter, Map<String, ChannelModel> into) {
     Named<Part> channel = linked.sheet().channels().get(name);
     if (channel != null && !into.containsKey(name)) {
-      ChannelModel model = ChannelModel.bind(linked, channel, Optional.of(converter));
+      ChannelModel model = bind(channel, Optional.of(converter));
       if (model != null) {
         into.put(name, model);
       }
     }
+  }
+
+  /** Null where the channel cannot be read, or where reading it is an internal fault. */
+  private ChannelModel bind(Named<Part> channel, Optional<Named<Part>> converter) {
+    try {
+      return ChannelModel.bind(linked, channel, converter);
+    } catch (RuntimeException e) {
+      faults.put(channel.name(), "model: " + described(e));
+      return null;
+    }
+  }
+
+  private static String described(RuntimeException e) {
+    StackTraceElement[] trace = e.getStackTrace();
+    return e + (trace.length > 0 ? " at " + trace[0] : "");
+  }
+
+  /** All there is to say of a channel whose model is an internal fault. */
+  private ChannelFigures faulty(
+      Named<Part> channel, Optional<Named<Part>> scan, Optional<Named<Part>> converter) {
+    return new ChannelFigures(
+        channel,
+        scan,
+        converter,
+        0,
+        Figures.EMPTY,
+        List.of(),
+        Optional.empty(),
+        List.of(),
+        List.of(),
+        List.of(faults.get(channel.name())));
   }
 
   /** What can be said of channels that no scan samples: they are judged by the only converter. */
@@ -168,7 +204,10 @@ public final class Analyzer {
       if (sampled) {
         continue;
       }
-      ChannelModel model = ChannelModel.bind(linked, channel, only);
+      ChannelModel model = bind(channel, only);
+      if (faults.containsKey(channel.name())) {
+        unscanned.put(channel.name(), faulty(channel, Optional.empty(), only));
+      }
       if (model != null) {
         PinRange pin = model.complete() ? PinRange.of(model) : null;
         unscanned.put(channel.name(), new ChannelAnalysis(model, null, pin).run(Optional.empty()));
@@ -273,9 +312,7 @@ public final class Analyzer {
       try {
         task.run();
       } catch (RuntimeException e) {
-        StackTraceElement[] trace = e.getStackTrace();
-        String where = trace.length > 0 ? " at " + trace[0] : "";
-        faults.add(study + ": " + e + where);
+        faults.add(study + ": " + described(e));
       }
     }
   }

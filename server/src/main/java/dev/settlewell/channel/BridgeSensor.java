@@ -33,11 +33,6 @@ record BridgeSensor(Range spans, int sensitivity, int excitation, int resistance
   }
 
   @Override
-  public boolean isLinear() {
-    return true;
-  }
-
-  @Override
   public Optional<Port> shorted(double[] p) {
     return Optional.of(Port.voltage(0, 0));
   }

@@ -158,10 +158,24 @@ record ChannelModel(
     return forward.slope(x, measures.width() * 1e-5);
   }
 
+  /** Whether the code is a straight line of the measured quantity, to a hundredth of an LSB. */
+  boolean isStraight() {
+    double[] p = forward.nominal();
+    double low = forward.volts(measures.low(), p);
+    double high = forward.volts(measures.high(), p);
+    for (int i = 1; i < 8; i++) {
+      double chord = low + (high - low) * i / 8;
+      double volts = forward.volts(measures.low() + measures.width() * i / 8, p);
+      if (Math.abs(volts - chord) > 0.01 * lsb()) {
+        return false;
+      }
+    }
+    return true;
+  }
+
   /** Points of the measured range worth looking at: its ends, and between where curves bend. */
   double[] points() {
-    boolean straight = forward.sensor().isLinear() && !forward.sensor().resistanceVaries();
-    int steps = straight ? 2 : 4;
+    int steps = isStraight() && !forward.sensor().resistanceVaries() ? 2 : 4;
     double[] points = new double[steps + 1];
     for (int i = 0; i <= steps; i++) {
       points[i] = measures.low() + measures.width() * i / steps;

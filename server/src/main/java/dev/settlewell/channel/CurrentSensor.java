@@ -32,14 +32,20 @@ record CurrentSensor(
         line.output(x + p[accuracy]) * scale, resistance < 0 ? 0 : 1 / p[resistance]);
   }
 
+  /**
+   * NAMUR NE 43: a 4 to 20 mA transmitter measures from 3.8 mA to 20.5 mA and reports its own
+   * failure at or below 3.6 mA or at or above 21 mA (common practice).
+   */
   @Override
-  public List<Integer> resistances() {
-    return resistance < 0 ? List.of() : List.of(resistance);
+  public List<Double> failureCurrents() {
+    boolean loop =
+        Math.min(line.from(), line.to()) == 4e-3 && Math.max(line.from(), line.to()) == 20e-3;
+    return loop ? List.of(3.6e-3, 21e-3) : List.of();
   }
 
   @Override
-  public boolean isLinear() {
-    return true;
+  public List<Integer> resistances() {
+    return resistance < 0 ? List.of() : List.of(resistance);
   }
 
   /** A loop's wires may touch before the shunt: no current reaches it any more. */

@@ -17,7 +17,7 @@ final class FirmwareStudy {
 
   static List<Figure> figures(ChannelModel model, Optional<Budget> budget) {
     List<Figure> figures = new ArrayList<>();
-    if (model.forward().sensor().isLinear() && !model.forward().sensor().resistanceVaries()) {
+    if (model.isStraight()) {
       scale(model, figures);
     } else {
       String why = "the value is no straight line of the code: firmware needs its curve";
@@ -38,8 +38,12 @@ final class FirmwareStudy {
     double[] p = forward.nominal();
     // The voltage in the middle of a code: half an LSB above its first transition.
     double shift = adc.firstTransition() - 0.5;
-    double low = forward.inverse(adc.volts(shift, p), model.measures().low());
-    double high = forward.inverse(adc.volts(adc.codes() + shift, p), model.measures().high());
+    // The line through the ends of the range, carried on to code 0 and to full scale.
+    double from = forward.volts(model.measures().low(), p);
+    double perVolt =
+        model.measures().width() / (forward.volts(model.measures().high(), p) - from);
+    double low = model.measures().low() + (adc.volts(shift, p) - from) * perVolt;
+    double high = low + adc.codes() * adc.lsb(p) * perVolt;
     double scale = (high - low) / adc.codes();
     figures.add(
         Figure.of(

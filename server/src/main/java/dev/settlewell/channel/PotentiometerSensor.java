@@ -40,11 +40,6 @@ record PotentiometerSensor(Range spans, int resistance, int across, int accuracy
   }
 
   @Override
-  public boolean isLinear() {
-    return true;
-  }
-
-  @Override
   public double low() {
     return spans.low();
   }

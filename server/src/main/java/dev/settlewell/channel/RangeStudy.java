@@ -180,6 +180,16 @@ final class RangeStudy {
     SensorModel sensor = model.forward().sensor();
     fault("code-open", sensor.open(p), "code with the sensor's lead off");
     fault("code-short", sensor.shorted(p), "code with the sensor shorted");
+    List<Double> failures = sensor.failureCurrents();
+    if (!failures.isEmpty()) {
+      loopFailure("code-loop-low", failures.get(0));
+      loopFailure("code-loop-high", failures.get(1));
+    }
+  }
+
+  private void loopFailure(String name, double amperes) {
+    String formula = "code at the current with which a transmitter reports its failure (NE 43)";
+    fault(name, Optional.of(Port.current(amperes, 0)), formula);
   }
 
   private void fault(String name, Optional<Port> source, String formula) {

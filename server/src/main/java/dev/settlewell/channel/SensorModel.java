@@ -31,11 +31,6 @@ interface SensorModel {
     return Double.POSITIVE_INFINITY;
   }
 
-  /** Whether the measured quantity is a linear function of the output. */
-  default boolean isLinear() {
-    return false;
-  }
-
   /** What the path sees once a lead has come off: by default, nothing. */
   default Optional<Port> open(double[] p) {
     return Optional.of(Port.current(0, 0));
@@ -47,6 +42,11 @@ interface SensorModel {
   /** Whether it drives a current: an interferer then stands in series with it and its shunt. */
   default boolean drivesCurrent() {
     return false;
+  }
+
+  /** Currents at which a two-wire loop reports its own failure, A; empty where it is none. */
+  default List<Double> failureCurrents() {
+    return List.of();
   }
 
   /** Power that warms it by one kelvin, W/K; NaN where it is not stated or does not matter. */

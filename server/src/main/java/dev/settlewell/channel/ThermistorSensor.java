@@ -62,6 +62,11 @@ record ThermistorSensor(
       }
       abc[i] = item.value();
     }
+    if (!(abc[1] > 0 && abc[2] >= 0)) {
+      // Such a curve does not fall with temperature everywhere: the text's own finding says so.
+      bench.inputs.spoil();
+      return null;
+    }
     Curve curve = Thermistor.steinhartHart(abc[0], abc[1], abc[2]);
     int r25 = bench.optional("thermistor-r25", sensor.quantity("r25"), curve.at(25));
     double nominal = bench.parameters.nominals()[r25];

@@ -8,11 +8,14 @@ import dev.settlewell.unit.Range;
 /**
  * The straight line between a measured quantity and a transducer's output: {@code output} over
  * {@code spans}; without {@code output} the measured quantity is the output itself.
+ *
+ * @param from output at {@code x0}
+ * @param to output at the other end of the span
  */
-record Transducer(double x0, double y0, double slope) {
+record Transducer(double x0, double slope, double from, double to) {
 
   double output(double x) {
-    return y0 + (x - x0) * slope;
+    return from + (x - x0) * slope;
   }
 
   static Range spans(Part sensor, Bench bench) {
@@ -25,13 +28,14 @@ record Transducer(double x0, double y0, double slope) {
     Slot.Stated<Range> output = bench.inputs.optional(sensor.range("output"));
     if (output == null) {
       if (bench.measures().unit().dimension() == own) {
-        return new Transducer(0, 0, 1);
+        return new Transducer(0, 1, 0, 0);
       }
       bench.inputs.need(sensor.range("output"));
       return null;
     }
     Range from = spans(sensor, bench);
     Range to = output.value();
-    return new Transducer(from.low(), to.low(), (to.high() - to.low()) / from.width());
+    return new Transducer(
+        from.low(), (to.high() - to.low()) / from.width(), to.low(), to.high());
   }
 }

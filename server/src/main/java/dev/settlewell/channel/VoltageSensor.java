@@ -35,11 +35,6 @@ record VoltageSensor(
   }
 
   @Override
-  public boolean isLinear() {
-    return true;
-  }
-
-  @Override
   public Optional<Port> shorted(double[] p) {
     return Optional.of(Port.voltage(0, 0));
   }

@@ -123,7 +123,7 @@ final class SchemaReader {
         measured,
         isTrue(json, "x-positive"),
         number(json, "x-at-least").or(() -> number(json, "minimum")),
-        number(json, "maximum"),
+        number(json, "x-at-most").or(() -> number(json, "maximum")),
         isTrue(json, "x-difference"),
         isTrue(json, "x-shunt-sized"),
         isTrue(json, "x-increasing"),

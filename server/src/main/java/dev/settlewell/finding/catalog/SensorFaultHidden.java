@@ -29,6 +29,17 @@ final class SensorFaultHidden extends ChannelCheck {
   void check(ChannelView channel, Consumer<Finding> report) {
     check(channel, "open", report);
     check(channel, "short", report);
+    check(channel, "loop-low", report);
+    check(channel, "loop-high", report);
+  }
+
+  private static String what(String fault) {
+    return switch (fault) {
+      case "open" -> "an open sensor";
+      case "short" -> "a shorted sensor";
+      case "loop-low" -> "a transmitter that reports its failure with 3.6 mA";
+      default -> "a transmitter that reports its failure with 21 mA";
+    };
   }
 
   private void check(ChannelView channel, String fault, Consumer<Finding> report) {
@@ -44,7 +55,7 @@ final class SensorFaultHidden extends ChannelCheck {
     if (!inside && undetermined.isEmpty()) {
       return;
     }
-    String what = fault.equals("open") ? "an open sensor" : "a shorted sensor";
+    String what = what(fault);
     String codes = Words.count(Math.floor(low)) + " to " + Words.count(Math.ceil(high));
     String message =
         inside
