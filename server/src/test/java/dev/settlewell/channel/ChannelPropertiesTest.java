@@ -216,7 +216,7 @@ class ChannelPropertiesTest {
     Random random = new Random(seed);
     for (ChannelFigures channel : channels(sheet)) {
       ChannelModel model = model(sheet, channel);
-      double slack = model.forward().sensor().isLinear() ? 1e-9 : 0.03;
+      double slack = model.isStraight() ? 1e-9 : 0.03;
       double hard = channel.budget().orElseThrow().hardLimit();
       double pinLow = value(channel, "pin-low");
       double pinHigh = value(channel, "pin-high");
