@@ -8,7 +8,6 @@ import dev.settlewell.syntax.SyntaxTree;
 import dev.settlewell.text.SourceText;
 import java.util.List;
 import java.util.Optional;
-import java.util.stream.Stream;
 
 /**
  * One sheet, read, computed and judged: the one thing every feature of an editor looks at.
@@ -36,11 +35,8 @@ public record Checked(Analysis analysis, List<Finding> findings) {
     return sheet().tree();
   }
 
-  /** The text of this sheet or of one that it uses. */
+  /** The text of this sheet, of one that it uses, or of a source of its firmware. */
   public Optional<SourceText> text(String name) {
-    return Stream.concat(Stream.of(sheet()), linked().used().stream())
-        .map(Sheet::text)
-        .filter(text -> text.name().equals(name))
-        .findFirst();
+    return linked().text(name);
   }
 }

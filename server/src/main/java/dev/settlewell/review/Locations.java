@@ -16,6 +16,9 @@ final class Locations {
   Locations(List<Reviewed> sheets) {
     for (Reviewed sheet : sheets) {
       sheet.analysis().linked().used().stream().map(Sheet::text).forEach(this::add);
+      sheet.analysis().linked().sources().values().stream()
+          .flatMap(source -> source.text().stream())
+          .forEach(this::add);
       add(sheet.text());
     }
   }

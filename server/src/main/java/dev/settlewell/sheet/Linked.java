@@ -2,10 +2,13 @@ package dev.settlewell.sheet;
 
 import dev.settlewell.firmware.Source;
 import dev.settlewell.text.Problem;
+import dev.settlewell.text.SourceText;
 import dev.settlewell.unit.Toleranced;
 import java.time.LocalDate;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
+import java.util.stream.Stream;
 
 /**
  * A sheet together with all it uses: what its names mean, wherever they are defined, and the sources
@@ -38,6 +41,15 @@ public record Linked(
       List<Problem> problems,
       LocalDate date) {
     this(sheet, used, supplies, converters, interferers, problems, Map.of(), date);
+  }
+
+  /** The text of that name that a place may stand in: a sheet's or a source's. */
+  public Optional<SourceText> text(String name) {
+    return Stream.concat(
+            Stream.concat(Stream.of(sheet), used.stream()).map(Sheet::text),
+            sources.values().stream().flatMap(source -> source.text().stream()))
+        .filter(text -> text.name().equals(name))
+        .findFirst();
   }
 
   public Linked with(Map<String, Source> other) {

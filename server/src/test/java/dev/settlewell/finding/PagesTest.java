@@ -28,8 +28,7 @@ class PagesTest {
   @ParameterizedTest
   @MethodSource("names")
   void theFirstSheetHasIt(String name) {
-    String sheet = Pages.of(name).orElseThrow().sheet("A sheet that has it").orElseThrow();
-    Judged judged = Judged.sheet(sheet);
+    Judged judged = judged(name, "A sheet that has it");
     List<String> others =
         judged.findings().stream()
             .filter(f -> !f.isAccepted() && f.severity().atLeast(Severity.WARNING))
@@ -39,6 +38,19 @@ class PagesTest {
             .toList();
     assertThat(judged.names()).as("%s", judged.shown()).contains(name);
     assertThat(others).as("%s", judged.shown()).isEmpty();
+  }
+
+  /** The sheet of a section; a page on firmware has the source file beside it. */
+  private static Judged judged(String name, String heading) {
+    Pages.Page page = Pages.of(name).orElseThrow();
+    String sheet = page.sheet(heading).orElseThrow();
+    String section = page.section(heading).orElseThrow();
+    int source = section.indexOf("```c\n");
+    if (source < 0) {
+      return Judged.sheet(sheet);
+    }
+    String code = section.substring(source + "```c\n".length(), section.indexOf("```", source + 4));
+    return Judged.with(sheet, "dryer.h", code);
   }
 
   /** A page whose sheet cannot but have another finding too says so by its name. */
@@ -52,8 +64,7 @@ class PagesTest {
   @ParameterizedTest
   @MethodSource("names")
   void theSecondSheetIsClean(String name) {
-    String sheet = Pages.of(name).orElseThrow().sheet("A sheet that has it not").orElseThrow();
-    Judged judged = Judged.sheet(sheet);
+    Judged judged = judged(name, "A sheet that has it not");
     assertThat(judged.names()).as("%s", judged.shown()).doesNotContain(name);
     assertThat(judged.findings())
         .as("%s", judged.shown())

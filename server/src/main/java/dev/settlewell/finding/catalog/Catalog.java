@@ -2,7 +2,6 @@ package dev.settlewell.finding.catalog;
 
 import dev.settlewell.finding.Check;
 import java.util.List;
-import java.util.stream.Stream;
 
 /** Every finding there is, in the order of lists and reports: text, sheet, then the figures. */
 public final class Catalog {
@@ -57,19 +56,14 @@ public final class Catalog {
           new MissingCodes(),
           new AveragingWithoutDither(),
           new AccumulatorOverflows(),
+          new FirmwareConstantDiffers(),
+          new FirmwareConstantMissing(),
           new HazardousVoltage(),
           new AcceptanceExpired(),
           new AcceptanceUnused());
 
-  /**
-   * What a sheet may accept or give a severity to: the catalogue's names, and those of the findings
-   * that compare a sheet with the sources of its firmware.
-   */
-  public static final List<String> NAMES =
-      Stream.concat(
-              CHECKS.stream().map(Check::name),
-              Stream.of("firmware-constant-differs", "firmware-constant-missing"))
-          .toList();
+  /** What a sheet may accept or give a severity to. */
+  public static final List<String> NAMES = CHECKS.stream().map(Check::name).toList();
 
   private Catalog() {}
 }
