@@ -39,6 +39,9 @@ record ChannelModel(
 
   static final double ROOM = 25;
 
+  /** Of an LSB: a pin that moves by less over the whole range does not see what is measured. */
+  private static final double BLIND = 1e-6;
+
   /** Null where the channel itself could not be read: nothing can be said of it. */
   static ChannelModel bind(Linked linked, Named<Part> channel, Optional<Named<Part>> converter) {
     Part part = channel.value().stated().orElse(null);
@@ -82,12 +85,32 @@ record ChannelModel(
     }
     ForwardModel model =
         new ForwardModel(sensor, stages, adc, settling, pickup, bench.parameters.nominals());
-    // A current with nowhere to flow, or an open node: no voltage follows from the sheet.
-    double middle = (bench.measures().low() + bench.measures().high()) / 2;
-    if (!Double.isFinite(model.volts(middle, model.nominal()))) {
-      bench.inputs.spoil();
+    if (isBlind(model, bench.measures())) {
+      lacksDrive(part, sensorPart.value(), sensor, bench);
     }
     return model;
+  }
+
+  /** Whether the pin's voltage does not follow from what is measured: open, or always the same. */
+  private static boolean isBlind(ForwardModel model, Range measures) {
+    double[] p = model.nominal();
+    double low = model.volts(measures.low(), p);
+    double middle = model.volts(measures.low() + measures.width() / 2, p);
+    double high = model.volts(measures.high(), p);
+    double moves = Math.max(Math.abs(middle - low), Math.abs(high - middle));
+    return !(Double.isFinite(moves) && moves > BLIND * model.converter().lsb(p));
+  }
+
+  /** A current needs a shunt, a resistance something that drives a current through it. */
+  private static void lacksDrive(Part part, Part sensorPart, SensorModel sensor, Bench bench) {
+    String path = part.list("path", Part.class).pointer();
+    if (sensor.drivesCurrent()) {
+      bench.inputs.lacks(path + "/shunt", sensorPart.keyPlace());
+    } else if (sensor.resistanceVaries()) {
+      bench.inputs.lacks(path + "/pull-up", sensorPart.keyPlace());
+    } else {
+      bench.inputs.spoil();
+    }
   }
 
   private static List<StageModel> stages(Part part, Bench bench) {

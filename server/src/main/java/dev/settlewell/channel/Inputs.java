@@ -1,6 +1,7 @@
 package dev.settlewell.channel;
 
 import dev.settlewell.sheet.Slot;
+import dev.settlewell.text.Place;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -34,6 +35,11 @@ final class Inputs {
     }
     wrong |= slot.isWrong();
     return null;
+  }
+
+  /** Something that would have to stand in the sheet, under a key of its own. */
+  void lacks(String pointer, Place parent) {
+    missing.add(new Figure.Input(pointer, parent));
   }
 
   void spoil() {

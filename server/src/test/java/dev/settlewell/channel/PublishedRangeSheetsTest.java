@@ -378,6 +378,33 @@ class PublishedRangeSheetsTest {
     assertThat(1e3 * value(channel, "pin-nominal-high")).isCloseTo(30, within(1e-12));
   }
 
+  /** A resistance without a current through it, a current without a shunt: the sheet lacks one. */
+  @ParameterizedTest
+  @CsvSource(
+      delimiter = ';',
+      value = {
+        "0 °C to 50 °C; {thermistor: {r25: 10 kΩ, beta: 3950 K}}; resistor: 1 kΩ; pull-up",
+        "0 °C to 50 °C; {rtd: {}}; capacitor: 1 nF; pull-up",
+        "0 bar to 9 bar; {table: {points: [[0 bar, 10 Ω], [9 bar, 180 Ω]]}}; resistor: 1 kΩ; pull-up",
+        "4 mA to 20 mA; {current: {}}; resistor: 1 kΩ; shunt"
+      })
+  void sensorThatNothingDrives(String measures, String sensor, String path, String lacking) {
+    ChannelFigures channel =
+        channel(
+            "",
+            "bits: 12\nreference: 3 V\n",
+            "measures: %s\nsensor: %s\npath: [%s]\n"
+                .formatted(measures.strip(), sensor.strip(), path.strip()));
+    assertThat(channel.figures().get("lsb").orElseThrow().state())
+        .isInstanceOfSatisfying(
+            Figure.State.Missing.class,
+            missing ->
+                assertThat(missing.inputs())
+                    .extracting(Figure.Input::pointer)
+                    .containsExactly("/channels/input/path/" + lacking.strip()));
+    assertThat(channel.budget()).isEmpty();
+  }
+
   static BudgetRow row(ChannelFigures channel, String name) {
     return channel.budget().orElseThrow().rows().stream()
         .filter(r -> r.name().equals(name))
