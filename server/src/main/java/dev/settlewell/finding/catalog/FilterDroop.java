@@ -75,7 +75,9 @@ final class FilterDroop extends ChannelCheck {
             .flatMap(part -> part.quantity("value").stated())
             .map(quantity -> quantity.value())
             .orElse(Double.NaN);
-    double needed = present * channel.number("corner-frequency") / corner(channel, share);
+    // The slowest corner within the tolerances is the one that has to come up.
+    double slowest = corner(channel, channel.number("droop"));
+    double needed = present * slowest / corner(channel, share);
     if (!(needed < present)) {
       return Optional.empty();
     }
