@@ -43,13 +43,15 @@ final class WorkspaceSync {
     if (can.watchesFiles()) {
       FileSystemWatcher sheets = new FileSystemWatcher(Either.forLeft("**/*.channels.yaml"));
       FileSystemWatcher project = new FileSystemWatcher(Either.forLeft("**/.settlewell.yaml"));
+      FileSystemWatcher sources =
+          new FileSystemWatcher(Either.forLeft("**/*.{c,h,cc,cpp,cxx,hh,hpp,hxx,inc}"));
       session
           .client()
           .register(
               new Registration(
                   "files",
                   WATCH,
-                  new DidChangeWatchedFilesRegistrationOptions(List.of(sheets, project))));
+                  new DidChangeWatchedFilesRegistrationOptions(List.of(sheets, project, sources))));
     }
     if (can.registersConfiguration()) {
       session.client().register(new Registration("settings", CONFIGURE));
