@@ -23,7 +23,9 @@ record BridgeSensor(Range spans, int sensitivity, int excitation, int resistance
 
   @Override
   public Port port(double x, double[] p) {
-    double fraction = (x + p[accuracy] - spans.low()) / spans.width();
+    // A span through zero is that of a cell that is pulled and pushed: balanced at zero.
+    double balanced = Math.max(spans.low(), Math.min(0, spans.high()));
+    double fraction = (x + p[accuracy] - balanced) / (spans.high() - balanced);
     return Port.voltage(Bridge.output(p[sensitivity], p[excitation], fraction), p[resistance]);
   }
 

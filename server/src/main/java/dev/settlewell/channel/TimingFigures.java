@@ -30,7 +30,7 @@ final class TimingFigures {
     double busy = 0;
     for (ScanTiming scan : scans) {
       inputs.include(scan.allInputs());
-      if (scan.complete()) {
+      if (scan.complete() && scan.rate() != null) {
         busy += utilisation(scan);
       }
     }
@@ -43,14 +43,16 @@ final class TimingFigures {
                 "utilisation",
                 busy,
                 "1",
-                "sum over its scans of scan-time at the slowest clock / shortest period")
+                "sum over its scans of scan-time at the slowest clock / shortest period;"
+                    + " a continuous scan takes what they leave")
             : inputs.figure("utilisation", "1"));
     return figures;
   }
 
   private static double utilisation(ScanTiming scan) {
-    return scan.scanTime(scan.clock().low())
-        / (scan.rate() == null ? scan.scanTime(scan.clock().low()) : scan.shortestPeriod());
+    return scan.rate() == null
+        ? 1
+        : scan.scanTime(scan.clock().low()) / scan.shortestPeriod();
   }
 
   /** Of a scan. */
