@@ -24,7 +24,7 @@ record BridgeSensor(Range spans, int sensitivity, int excitation, int resistance
   @Override
   public Port port(double x, double[] p) {
     // A span through zero is that of a cell that is pulled and pushed: balanced at zero.
-    double balanced = Math.max(spans.low(), Math.min(0, spans.high()));
+    double balanced = spans.low() < 0 && spans.high() > 0 ? 0 : spans.low();
     double fraction = (x + p[accuracy] - balanced) / (spans.high() - balanced);
     return Port.voltage(Bridge.output(p[sensitivity], p[excitation], fraction), p[resistance]);
   }
