@@ -21,7 +21,7 @@ if not defined FOUND (
   echo settlewell: no Java 17 or newer was found; install one, or set JAVA_HOME to it 1>&2
   exit /b 2
 )
-"%FOUND%\bin\java.exe" -XX:+UseSerialGC -Xshare:auto -jar "%JAR%" %*
+"%FOUND%\bin\java.exe" -XX:+UseSerialGC -jar "%JAR%" %*
 exit /b %ERRORLEVEL%
 
 rem The version stands in the JDK's release file: JAVA_VERSION="17.0.15", or "1.8.0_402" of old.
