@@ -35,7 +35,9 @@ class FiguresPageTest {
   void listsEveryFigureWithItsUnit() throws IOException {
     Map<String, String> listed = listed();
     Map<String, String> computed = computed();
-    assertThat(computed.keySet()).isSubsetOf(listed.keySet());
+    List<String> unlisted =
+        computed.keySet().stream().filter(name -> !listed.containsKey(name)).toList();
+    assertThat(unlisted).as("figures that schema/figures.md does not list").isEmpty();
     assertThat(computed).hasSizeGreaterThan(50);
     computed.forEach((name, unit) -> assertThat(unit).as(name).isEqualTo(listed.get(name)));
   }

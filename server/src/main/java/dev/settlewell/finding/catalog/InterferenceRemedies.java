@@ -65,7 +65,7 @@ final class InterferenceRemedies {
    */
   private double corner() {
     double present = channel.number("corner-frequency");
-    double now = Double.isNaN(present) ? 1 : 1 / Math.hypot(1, line.low() / present);
+    double now = Double.isNaN(present) ? 1 : 1 / StrictMath.hypot(1, line.low() / present);
     double wanted = now * share;
     return line.low() / Math.sqrt(1 / (wanted * wanted) - 1);
   }
