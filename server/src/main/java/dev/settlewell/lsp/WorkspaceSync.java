@@ -18,6 +18,10 @@ import org.eclipse.lsp4j.jsonrpc.messages.Either;
 /** Folders, files on disk and settings: what changes beside the open documents. */
 final class WorkspaceSync {
   private static final String WATCH = "workspace/didChangeWatchedFiles";
+  /** Sheets, what marks a workspace, and the sources that firmware constants stand in. */
+  private static final List<String> WATCHED =
+      List.of("**/*.channels.yaml", "**/.settlewell.yaml", "**/*.{h,hh,hpp,hxx,c,cc,cpp,cxx,ino}");
+
   private static final String CONFIGURE = "workspace/didChangeConfiguration";
 
   private final Session session;
