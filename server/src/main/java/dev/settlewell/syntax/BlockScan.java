@@ -1,7 +1,6 @@
 package dev.settlewell.syntax;
 
 import dev.settlewell.syntax.Mending.Row;
-import dev.settlewell.text.Edit;
 import dev.settlewell.text.Fix;
 import dev.settlewell.text.Problem;
 import dev.settlewell.text.Span;
@@ -51,8 +50,7 @@ final class BlockScan {
     for (Level.Mend mend : mends) {
       Fix fix = new Fix("Level.Mend the indentation", mend.edits, false);
       mending.problems.add(
-          new Problem(
-              Problem.Kind.SYNTAX, mending.text.place(mend.span), mend.message, fix));
+          new Problem(Problem.Kind.SYNTAX, mending.text.place(mend.span), mend.message, fix));
     }
   }
 
@@ -131,7 +129,9 @@ final class BlockScan {
             + ": write "
             + to.indent
             + " blanks before it";
-    Level.Mend mend = new Level.Mend(new Span(row.content(), Math.max(shapes.keyEnd(row), row.content())), message);
+    Level.Mend mend =
+        new Level.Mend(
+            new Span(row.content(), Math.max(shapes.keyEnd(row), row.content())), message);
     mends.add(mend);
     to.astray = row.indent();
     to.astrayMend = mend;
@@ -144,7 +144,9 @@ final class BlockScan {
     int next = mending.nextContent(row.number());
     int colon = shapes.colon(row.content(), row.end());
     boolean open = colon >= 0 && mending.skipBlanks(colon + 1) >= row.end();
-    return !open || next < 0 || mending.row(next).indent() <= row.indent()
+    return !open
+        || next < 0
+        || mending.row(next).indent() <= row.indent()
         || mending.row(next).indent() > level.indent;
   }
 
@@ -246,7 +248,10 @@ final class BlockScan {
       boolean nested = shapes.isItem(content);
       boolean number = Character.isDigit(mending.draft.at(content)); // `- 1:30` is no key
       boolean key =
-          !nested && (number ? shapes.colon(content, row.end()) >= 0 : shapes.hasKey(content, row.end()));
+          !nested
+              && (number
+                  ? shapes.colon(content, row.end()) >= 0
+                  : shapes.hasKey(content, row.end()));
       if (!nested && !key) {
         level.last = values.value(content, row, level, "");
         return;

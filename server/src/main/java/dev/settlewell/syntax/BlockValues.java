@@ -174,10 +174,7 @@ final class BlockValues {
           hash,
           end,
           "YAML cuts the text here, at ` #`: put it in quotes, or write `# ` before a comment",
-          new Fix(
-              "Put the text in quotes",
-              mending.quoteFix(at, end).edits(),
-              false));
+          new Fix("Put the text in quotes", mending.quoteFix(at, end).edits(), false));
     }
     return Last.PLAIN;
   }

@@ -26,7 +26,8 @@ final class Comments {
       } else if (content.charAt(offset) == '#' && startsComment(content, offset)) {
         int line = text.lineAt(offset);
         Span place = new Span(offset, text.line(line).end());
-        found.add(new Comment(text.place(place), startsLine(content, text.lineStart(line), offset)));
+        found.add(
+            new Comment(text.place(place), startsLine(content, text.lineStart(line), offset)));
         offset = place.end();
       } else {
         offset++;

@@ -24,7 +24,9 @@ final class Conflicts {
     }
   }
 
-  /** @return the line behind the conflict */
+  /**
+   * @return the line behind the conflict
+   */
   private int conflict(int first) {
     int upperEnd = -1;
     int middle = -1;
@@ -69,9 +71,7 @@ final class Conflicts {
 
   private Edit remove(int from, int to) {
     int end =
-        to + 1 < mending.text.lineCount()
-            ? mending.text.lineStart(to + 1)
-            : mending.text.length();
+        to + 1 < mending.text.lineCount() ? mending.text.lineStart(to + 1) : mending.text.length();
     return mending.edit(mending.text.lineStart(from), end, "");
   }
 

@@ -14,8 +14,8 @@ import java.util.stream.Collectors;
  * ({@code path:} and a deeper line below it) the answer is {@link NewKey}, and whoever knows the
  * schema offers what belongs there.
  *
- * <p>The answer is right also on lines that could not be read: what was typed there is told from the
- * line, and what it belongs to from its indentation and the tree around it.
+ * <p>The answer is right also on lines that could not be read: what was typed there is told from
+ * the line, and what it belongs to from its indentation and the tree around it.
  */
 public sealed interface Cursor {
 
@@ -60,8 +60,7 @@ public sealed interface Cursor {
    * @param dashed false where {@code "- "} is still to be written; true in brackets
    * @param indent the column of the list's dashes; 0 in brackets
    */
-  record InItem(
-      List<String> path, Node item, Span span, boolean flow, boolean dashed, int indent)
+  record InItem(List<String> path, Node item, Span span, boolean flow, boolean dashed, int indent)
       implements Cursor {
     public InItem {
       path = List.copyOf(path);

@@ -106,10 +106,10 @@ final class CursorFinder {
     }
     int start = item.place().start();
     int end = item.place().end();
-    boolean before = offset < start && text.lineAt(offset) == text.lineAt(start) && afterDash(start);
+    boolean before =
+        offset < start && text.lineAt(offset) == text.lineAt(start) && afterDash(start);
     boolean covered = !isBlock(item) && start <= offset && offset <= end;
-    boolean behind =
-        !isBlock(item) && offset > end && text.lineAt(offset) == text.lineAt(end);
+    boolean behind = !isBlock(item) && offset > end && text.lineAt(offset) == text.lineAt(end);
     if (!before && !covered && !behind) {
       return Optional.empty();
     }
@@ -131,7 +131,9 @@ final class CursorFinder {
       Span key = entry.key().place().span();
       if (key.touches(offset)) {
         return Optional.of(
-            hasColon(key.end()) ? new Cursor.OnKey(here, mapping, entry) : newKey(mapping, path, key));
+            hasColon(key.end())
+                ? new Cursor.OnKey(here, mapping, entry)
+                : newKey(mapping, path, key));
       }
       Node value = entry.value();
       if (isFlow(value) && inside(value)) {
@@ -153,8 +155,7 @@ final class CursorFinder {
   }
 
   private Cursor newKey(Node.Mapping mapping, List<String> path, Span word) {
-    return new Cursor.NewKey(
-        path, Optional.of(mapping), word, Span.at(word.start()), 0, true);
+    return new Cursor.NewKey(path, Optional.of(mapping), word, Span.at(word.start()), 0, true);
   }
 
   private Optional<Cursor> inBrackets(Node node, List<String> path) {
@@ -196,7 +197,9 @@ final class CursorFinder {
     int line = text.lineAt(offset);
     boolean alone = !valueOnKeyLine || line > text.lineAt(scalar.place().start());
     int start = scalar.place().start();
-    boolean plain = scalar.inset() == 0 && (start == content.length() || "|>".indexOf(content.charAt(start)) < 0);
+    boolean plain =
+        scalar.inset() == 0
+            && (start == content.length() || "|>".indexOf(content.charAt(start)) < 0);
     return alone && plain && isWord(text.slice(text.line(line)).strip());
   }
 
@@ -230,12 +233,14 @@ final class CursorFinder {
   }
 
   private boolean isBlock(Node node) {
-    return (node instanceof Node.Mapping m && !m.flow() || node instanceof Node.Sequence s && !s.flow())
+    return (node instanceof Node.Mapping m && !m.flow()
+            || node instanceof Node.Sequence s && !s.flow())
         && !isAlias(node, content);
   }
 
   private boolean isFlow(Node node) {
-    return (node instanceof Node.Mapping m && m.flow() || node instanceof Node.Sequence s && s.flow())
+    return (node instanceof Node.Mapping m && m.flow()
+            || node instanceof Node.Sequence s && s.flow())
         && !isAlias(node, content);
   }
 

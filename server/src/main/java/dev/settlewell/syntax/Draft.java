@@ -5,8 +5,8 @@ import java.util.Arrays;
 import java.util.TreeMap;
 
 /**
- * The text as the YAML parser is given it: the sheet's own text with what keeps YAML from reading it
- * patched over, and the way back from the parser's indices to the sheet's own offsets.
+ * The text as the YAML parser is given it: the sheet's own text with what keeps YAML from reading
+ * it patched over, and the way back from the parser's indices to the sheet's own offsets.
  *
  * <p>A patch writes one character over another, drops one, or inserts a few. Nothing here changes
  * what the user sees: every place handed out is a place in the original text.

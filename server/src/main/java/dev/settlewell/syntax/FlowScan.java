@@ -5,7 +5,9 @@ import dev.settlewell.text.Span;
 import java.util.ArrayDeque;
 import java.util.Deque;
 
-/** Walks through one {@code [list]} or {@code {mapping}} and mends what would cost the whole file. */
+/**
+ * Walks through one {@code [list]} or {@code {mapping}} and mends what would cost the whole file.
+ */
 final class FlowScan {
   private final Mending mending;
   private final Quotes quotes;

@@ -46,8 +46,7 @@ final class LeftOut {
 
   /** Leaves a line out with all that stands deeper below it. */
   void dropBlock(Row row, String message) {
-    mending.syntax(
-        row.content(), mending.beforeComment(row.content(), row.end()), message);
+    mending.syntax(row.content(), mending.beforeComment(row.content(), row.end()), message);
     mending.draft.blank(row.content(), row.end());
     int next;
     while ((next = mending.nextContent(mending.line)) >= 0

@@ -146,7 +146,8 @@ final class LineCursor {
       return;
     }
     if (node instanceof Node.Mapping mapping && !mapping.flow()) {
-      int column = mapping.entries().isEmpty() ? 0 : column(text, mapping.entries().get(0).place().start());
+      int column =
+          mapping.entries().isEmpty() ? 0 : column(text, mapping.entries().get(0).place().start());
       levels.add(new Level(Optional.of(mapping), false, column, path));
       Node.Entry above = null;
       for (Node.Entry entry : mapping.entries()) {

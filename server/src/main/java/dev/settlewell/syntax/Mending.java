@@ -117,7 +117,9 @@ final class Mending {
     return at;
   }
 
-  /** Where the text of a line ends that began at {@code from}: before its comment, if it has one. */
+  /**
+   * Where the text of a line ends that began at {@code from}: before its comment, if it has one.
+   */
   int beforeComment(int from, int end) {
     for (int i = from; i < end; i++) {
       if (i > from && comment(i)) {

@@ -31,7 +31,9 @@ public sealed interface Node {
     }
   }
 
-  /** Nothing stands where a value belongs: {@code key:} alone. The place is empty, behind the colon. */
+  /**
+   * Nothing stands where a value belongs: {@code key:} alone. The place is empty, behind the colon.
+   */
   record Absent(Place place) implements Node {}
 
   /** Something stands here that could not be read; a problem says why. */

@@ -80,10 +80,7 @@ final class Quotes {
     String quote = String.valueOf(mending.draft.at(open));
     String message = "this quote is not closed: write " + quote + " where its text ends";
     mending.syntax(
-        open,
-        end,
-        message,
-        mending.guess("Close the quote", mending.edit(end, end, quote)));
+        open, end, message, mending.guess("Close the quote", mending.edit(end, end, quote)));
     if (quote.equals("\"") && endsInEscape(open, end)) {
       mending.breakOff(open, end);
     } else {

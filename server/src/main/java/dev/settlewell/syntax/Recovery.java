@@ -11,8 +11,9 @@ import java.util.Map;
 import java.util.Optional;
 
 /**
- * Takes what the parser failed on out of the draft: at first a value or a line, and where it goes on
- * failing the block around it, so that a part of the sheet that cannot be read never costs the rest.
+ * Takes what the parser failed on out of the draft: at first a value or a line, and where it goes
+ * on failing the block around it, so that a part of the sheet that cannot be read never costs the
+ * rest.
  */
 final class Recovery {
   /** How often the parser may fail below a line, by the depth of that line, before all goes. */
@@ -70,7 +71,9 @@ final class Recovery {
   private void takeOutBlock(Row above) {
     int first = mending.nextContent(above.number());
     int last = -1;
-    for (int n = first; n >= 0 && mending.row(n).indent() > above.indent(); n = mending.nextContent(n)) {
+    for (int n = first;
+        n >= 0 && mending.row(n).indent() > above.indent();
+        n = mending.nextContent(n)) {
       last = n;
     }
     if (last < 0) {
@@ -80,7 +83,8 @@ final class Recovery {
     mending.syntax(
         above.content(),
         above.end(),
-        "what stands below this cannot be read as YAML; mend its first error, and the rest is read");
+        "what stands below this cannot be read as YAML; mend its first error, and the rest is"
+            + " read");
     mending.breakOff(mending.row(first).content(), mending.row(last).end());
   }
 

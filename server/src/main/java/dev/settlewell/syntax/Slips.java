@@ -114,11 +114,14 @@ final class Slips {
         new Problem(
             Problem.Kind.SYNTAX,
             first.place(),
-            "`" + first.text() + "` stands beside `" + kind.text() + "`, not in it: indent it below",
+            "`"
+                + first.text()
+                + "` stands beside `"
+                + kind.text()
+                + "`, not in it: indent it below",
             new Fix("Indent it below `" + kind.text() + "`", edits, true)));
     Node.Mapping parameters = new Node.Mapping(inner, source.place(below), false);
-    return new Node.Mapping(
-        List.of(new Node.Entry(kind, parameters)), stage.place(), false);
+    return new Node.Mapping(List.of(new Node.Entry(kind, parameters)), stage.place(), false);
   }
 
   private static boolean isDigit(char c) {

@@ -19,8 +19,8 @@ final class Starts {
   }
 
   /**
-   * True where YAML would fail on this prose, or read it as something else: {@code Rev C: x}, {@code
-   * [draft] x}, {@code > 5 V}.
+   * True where YAML would fail on this prose, or read it as something else: {@code Rev C: x},
+   * {@code [draft] x}, {@code > 5 V}.
    */
   boolean misread(int start, int end) {
     char c = mending.draft.at(start);

@@ -7,7 +7,9 @@ import dev.settlewell.text.Problem;
 import java.util.ArrayList;
 import java.util.List;
 
-/** Tabs before a line's content: YAML takes none there; they are read as the blanks they stand for. */
+/**
+ * Tabs before a line's content: YAML takes none there; they are read as the blanks they stand for.
+ */
 final class Tabs {
   private static final int USUAL_UNIT = 2;
 

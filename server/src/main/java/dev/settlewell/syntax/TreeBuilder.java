@@ -12,8 +12,8 @@ import java.util.Optional;
 import java.util.TreeMap;
 import org.yaml.snakeyaml.DumperOptions.ScalarStyle;
 import org.yaml.snakeyaml.events.AliasEvent;
-import org.yaml.snakeyaml.events.CollectionStartEvent;
 import org.yaml.snakeyaml.events.CollectionEndEvent;
+import org.yaml.snakeyaml.events.CollectionStartEvent;
 import org.yaml.snakeyaml.events.DocumentEndEvent;
 import org.yaml.snakeyaml.events.DocumentStartEvent;
 import org.yaml.snakeyaml.events.Event;
@@ -93,8 +93,7 @@ final class TreeBuilder {
       if (depth >= MAX_DEPTH) {
         return tooDeep(start);
       }
-      node =
-          start instanceof MappingStartEvent ? mapping(start, depth) : sequence(start, depth);
+      node = start instanceof MappingStartEvent ? mapping(start, depth) : sequence(start, depth);
     } else {
       return new Node.Absent(source.place(draft.span(index(event), index(event))));
     }
@@ -120,7 +119,8 @@ final class TreeBuilder {
       entry(key, value).ifPresent(entries::add);
     }
     Place place = close(start, extent);
-    List<Node.Entry> read = start.isFlow() ? Slips.splitByComma(source, entries, problems) : entries;
+    List<Node.Entry> read =
+        start.isFlow() ? Slips.splitByComma(source, entries, problems) : entries;
     return new Node.Mapping(read, place, start.isFlow());
   }
 

@@ -17,9 +17,12 @@ final class Unreadable {
     return c == '\u00A0' || c == '\u2009' || c == '\u202F';
   }
 
-  /** Not a character to write in a sheet at all. Halves of pairs are judged with their neighbour. */
+  /**
+   * Not a character to write in a sheet at all. Halves of pairs are judged with their neighbour.
+   */
   static boolean isForbidden(char c) {
-    boolean control = c < ' ' && c != '\t' && c != '\n' && c != '\r' || c >= '\u007F' && c < '\u00A0';
+    boolean control =
+        c < ' ' && c != '\t' && c != '\n' && c != '\r' || c >= '\u007F' && c < '\u00A0';
     boolean lineBreak = c == '\u2028' || c == '\u2029';
     return control || lineBreak || c == '\uFEFF' || c >= '\uFFFE';
   }

@@ -128,7 +128,12 @@ class CursorTest {
       return "value " + at + " ‹" + text.slice(value.span()) + "›";
     } else if (cursor instanceof Cursor.InItem item) {
       String where = item.flow() ? " in brackets" : " at " + item.indent();
-      return "item " + at + " ‹" + text.slice(item.span()) + "›" + where
+      return "item "
+          + at
+          + " ‹"
+          + text.slice(item.span())
+          + "›"
+          + where
           + (item.dashed() ? "" : " without dash");
     } else if (cursor instanceof Cursor.NewKey key) {
       String where = key.flow() ? " in braces" : " at " + key.indent();

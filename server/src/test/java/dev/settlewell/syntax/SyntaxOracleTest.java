@@ -32,11 +32,62 @@ class SyntaxOracleTest {
   private static final int SEEDS = Integer.getInteger("seeds", 1500);
 
   private static final String[] TEXTS = {
-    "4.7 kΩ ±1 %", "-40 °C", "±2 mV", "a", "it's", "Rev C: x", "see #12", "x # y", "[draft] x", "{a: 1}", "- 1 V", "-1",
-    "*x*", "&x y", "!urgent", "@x", "> 5 V", "| x", "% of", "? x", ": x", "x:", "", " lead", "trail ",
-    "two\nlines", "two\n\nlines\n", "\tx", "a\ttab", "\"quoted\" x", "'single' x", "a, b", "4,7", "null", "~", "on", "1:30",
-    "😀 😀", "http://host/p?q#r", "--- x", "...", "<<", "=", "a \\ b", "\\", "long long long long long text that is folded, twice: or so",
-    "[", "]", "{", "}", ",", "#", "\"", "'", "|", ">-"
+    "4.7 kΩ ±1 %",
+    "-40 °C",
+    "±2 mV",
+    "a",
+    "it's",
+    "Rev C: x",
+    "see #12",
+    "x # y",
+    "[draft] x",
+    "{a: 1}",
+    "- 1 V",
+    "-1",
+    "*x*",
+    "&x y",
+    "!urgent",
+    "@x",
+    "> 5 V",
+    "| x",
+    "% of",
+    "? x",
+    ": x",
+    "x:",
+    "",
+    " lead",
+    "trail ",
+    "two\nlines",
+    "two\n\nlines\n",
+    "\tx",
+    "a\ttab",
+    "\"quoted\" x",
+    "'single' x",
+    "a, b",
+    "4,7",
+    "null",
+    "~",
+    "on",
+    "1:30",
+    "😀 😀",
+    "http://host/p?q#r",
+    "--- x",
+    "...",
+    "<<",
+    "=",
+    "a \\ b",
+    "\\",
+    "long long long long long text that is folded, twice: or so",
+    "[",
+    "]",
+    "{",
+    "}",
+    ",",
+    "#",
+    "\"",
+    "'",
+    "|",
+    ">-"
   };
   private static final String[] KEYS = {
     "a", "about", "because", "path", "upper", "r25", "2", "3", "some-key", "a: b", "#k", "[k]", "on"
@@ -47,8 +98,12 @@ class SyntaxOracleTest {
     int unreadable = 0;
     for (int seed = 0; seed < SEEDS; seed++) {
       Random random = new Random(seed);
-      String written = new Yaml(new SafeConstructor(new LoaderOptions()), new Representer(style(random)), style(new Random(seed)))
-          .dump(mapping(random, 3));
+      String written =
+          new Yaml(
+                  new SafeConstructor(new LoaderOptions()),
+                  new Representer(style(random)),
+                  style(new Random(seed)))
+              .dump(mapping(random, 3));
       Node composed;
       try {
         composed = new Yaml().compose(new StringReader(written));
@@ -59,7 +114,9 @@ class SyntaxOracleTest {
       SourceText text = SourceText.of("s", written);
       SyntaxTree tree = Syntax.parse(text);
       assertThat(tree.problems()).as("seed %d:%n%s", seed, written).isEmpty();
-      assertThat(Shown.values(tree.root())).as("seed %d:%n%s", seed, written).isEqualTo(shown(composed));
+      assertThat(Shown.values(tree.root()))
+          .as("seed %d:%n%s", seed, written)
+          .isEqualTo(shown(composed));
     }
     assertThat(unreadable).isLessThan(SEEDS / 50);
   }
@@ -68,7 +125,11 @@ class SyntaxOracleTest {
     DumperOptions options = new DumperOptions();
     options.setDefaultFlowStyle(FlowStyle.values()[random.nextInt(FlowStyle.values().length)]);
     ScalarStyle[] scalars = {
-      ScalarStyle.PLAIN, ScalarStyle.SINGLE_QUOTED, ScalarStyle.DOUBLE_QUOTED, ScalarStyle.LITERAL, ScalarStyle.FOLDED
+      ScalarStyle.PLAIN,
+      ScalarStyle.SINGLE_QUOTED,
+      ScalarStyle.DOUBLE_QUOTED,
+      ScalarStyle.LITERAL,
+      ScalarStyle.FOLDED
     };
     options.setDefaultScalarStyle(scalars[random.nextInt(scalars.length)]);
     int indent = 2 + random.nextInt(4);
@@ -81,7 +142,8 @@ class SyntaxOracleTest {
     options.setExplicitEnd(random.nextInt(8) == 0);
     options.setSplitLines(random.nextBoolean());
     options.setAllowUnicode(random.nextInt(4) > 0);
-    options.setLineBreak(random.nextBoolean() ? DumperOptions.LineBreak.UNIX : DumperOptions.LineBreak.WIN);
+    options.setLineBreak(
+        random.nextBoolean() ? DumperOptions.LineBreak.UNIX : DumperOptions.LineBreak.WIN);
     return options;
   }
 

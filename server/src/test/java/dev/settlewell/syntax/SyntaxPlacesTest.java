@@ -19,10 +19,12 @@ class SyntaxPlacesTest {
         "a: 'it''s'           ¦ {a‹a›: it's‹'it''s'›}‹a: 'it''s'›",
         "a:                   ¦ {a‹a›: ?‹›}‹a:›",
         "a: [1, 2 V ]         ¦ {a‹a›: [1‹1›, 2 V‹2 V›]‹[1, 2 V ]›}‹a: [1, 2 V ]›",
-        "a: {b: 😀, c: x}     ¦ {a‹a›: {b‹b›: 😀‹😀›, c‹c›: x‹x›}‹{b: 😀, c: x}›}‹a: {b: 😀, c: x}›",
+        "a: {b: 😀, c: x}     ¦ {a‹a›: {b‹b›: 😀‹😀›, c‹c›: x‹x›}‹{b: 😀, c: x}›}‹a: {b: 😀, c:"
+            + " x}›",
         "a: {}                ¦ {a‹a›: {}‹{}›}‹a: {}›",
         "a: &p x~b: *p        ¦ {a‹a›: x‹x›, b‹b›: x‹*p›}‹a: &p x~b: *p›",
-        "a: &p~  c: x~b: *p   ¦ {a‹a›: {c‹c›: x‹x›}‹c: x›, b‹b›: {c‹*p›: x‹*p›}‹*p›}‹a: &p~  c: x~b: *p›",
+        "a: &p~  c: x~b: *p   ¦ {a‹a›: {c‹c›: x‹x›}‹c: x›, b‹b›: {c‹*p›: x‹*p›}‹*p›}‹a: &p~  c:"
+            + " x~b: *p›",
         "a:~  b: x~# c~~z: 1  ¦ {a‹a›: {b‹b›: x‹x›}‹b: x›, z‹z›: 1‹1›}‹a:~  b: x~# c~~z: 1›",
         "a:~- x~-~  # c~b: 1  ¦ {a‹a›: [x‹x›, ?‹›]‹- x~-›, b‹b›: 1‹1›}‹a:~- x~-~  # c~b: 1›",
         "a: |~  x~  y~~b: 1   ¦ {a‹a›: x~y~‹|~  x~  y›, b‹b›: 1‹1›}‹a: |~  x~  y~~b: 1›",
@@ -37,7 +39,8 @@ class SyntaxPlacesTest {
       assertThat(tree.problems()).isEmpty();
     }
     SourceText crlf = SourceText.of("s", lf.replace("\n", "\r\n"));
-    assertThat(Shown.places(crlf, Syntax.parse(crlf).root()).replace("\r\n", "~").replace('\n', '~'))
+    assertThat(
+            Shown.places(crlf, Syntax.parse(crlf).root()).replace("\r\n", "~").replace('\n', '~'))
         .isEqualTo(expected.strip());
   }
 }

@@ -44,8 +44,7 @@ class SyntaxRobustnessTest {
     for (int i = 0; i < entries.size(); i++) {
       Node.Entry entry = entries.get(i);
       int start = entry.key().place().start();
-      int end =
-          i + 1 < entries.size() ? entries.get(i + 1).key().place().start() : SHEET.length();
+      int end = i + 1 < entries.size() ? entries.get(i + 1).key().place().start() : SHEET.length();
       blocks.add(new Block(entry.key().text(), start, end, Shown.values(entry.value())));
     }
     return blocks;
@@ -84,8 +83,38 @@ class SyntaxRobustnessTest {
   @ParameterizedTest
   @ValueSource(
       strings = {
-        "\"", "'", "[", "]", "{", "}", ":", ": ", "#", " #", "-", "- ", "\t", "|", "> ", "&", "*",
-        "!", "%", "@", "`", ",", "?", "=", "x", "\n", "\n\n", " ", "<<<<<<< ", "\u2028", "\0", "😀"
+        "\"",
+        "'",
+        "[",
+        "]",
+        "{",
+        "}",
+        ":",
+        ": ",
+        "#",
+        " #",
+        "-",
+        "- ",
+        "\t",
+        "|",
+        "> ",
+        "&",
+        "*",
+        "!",
+        "%",
+        "@",
+        "`",
+        ",",
+        "?",
+        "=",
+        "x",
+        "\n",
+        "\n\n",
+        " ",
+        "<<<<<<< ",
+        "\u2028",
+        "\0",
+        "😀"
       })
   void everyStrayCharacterCostsItsEntryOnly(String stray) {
     for (int at = 0; at <= SHEET.length(); at++) {
@@ -106,7 +135,8 @@ class SyntaxRobustnessTest {
     for (int i = 0; i < BLOCKS.size(); i++) {
       Block block = BLOCKS.get(i);
       boolean hit = block.start <= to && from <= block.end;
-      int keyLineEnd = i + 1 < BLOCKS.size() ? SHEET.indexOf('\n', BLOCKS.get(i + 1).start) + 1 : -1;
+      int keyLineEnd =
+          i + 1 < BLOCKS.size() ? SHEET.indexOf('\n', BLOCKS.get(i + 1).start) + 1 : -1;
       boolean nextKeyHit = i + 1 < BLOCKS.size() && from < keyLineEnd && to >= block.end;
       if (!hit && !nextKeyHit && !block.reading.equals(read.get(block.key))) {
         assertThat(read.get(block.key)).as("%s: %s", what, block.key).isEqualTo(block.reading);
@@ -130,7 +160,7 @@ class SyntaxRobustnessTest {
       inside(tree.root(), text);
       for (Problem problem : tree.problems()) {
         inside(problem.place(), text);
-          held(!problem.message().isBlank(), problem);
+        held(!problem.message().isBlank(), problem);
         for (Fix fix : problem.fixes()) {
           fix.edits().stream().map(Edit::place).forEach(place -> inside(place, text));
           apart(fix.edits());
@@ -194,7 +224,8 @@ class SyntaxRobustnessTest {
       assertThat(Shown.values(other.root())).isEqualTo(Shown.values(one.root()));
       assertThat(Shown.places(crlf, other.root()).replace("\r\n", "\n"))
           .isEqualTo(Shown.places(one.text(), one.root()));
-      assertThat(other.problems()).extracting(Problem::message)
+      assertThat(other.problems())
+          .extracting(Problem::message)
           .isEqualTo(one.problems().stream().map(Problem::message).toList());
       assertThat(other.comments()).hasSameSizeAs(one.comments());
     }
@@ -203,10 +234,57 @@ class SyntaxRobustnessTest {
   @Test
   void anythingAtAllIsRead() {
     String[] pieces = {
-      "a", "b:", ": ", ":", "- ", "-", "\n", "\n", "\n  ", "\n    ", "\r\n", "\t", " ", "\"", "'", "[", "]",
-      "{", "}", ",", "#", " #", "|", ">", "&a", "*a", "!", "?", "? ", "%", "@", "<<: ", "---\n", "...\n", "\\",
-      "about: ", "path:", "4,7", "kΩ", "\u2028", "\u0085", "\0", "\uFEFF", "\uD83D", "\uDE00", "😀", "\u00A0",
-      "<<<<<<< x\n", "=======\n", ">>>>>>> x\n", "\r"
+      "a",
+      "b:",
+      ": ",
+      ":",
+      "- ",
+      "-",
+      "\n",
+      "\n",
+      "\n  ",
+      "\n    ",
+      "\r\n",
+      "\t",
+      " ",
+      "\"",
+      "'",
+      "[",
+      "]",
+      "{",
+      "}",
+      ",",
+      "#",
+      " #",
+      "|",
+      ">",
+      "&a",
+      "*a",
+      "!",
+      "?",
+      "? ",
+      "%",
+      "@",
+      "<<: ",
+      "---\n",
+      "...\n",
+      "\\",
+      "about: ",
+      "path:",
+      "4,7",
+      "kΩ",
+      "\u2028",
+      "\u0085",
+      "\0",
+      "\uFEFF",
+      "\uD83D",
+      "\uDE00",
+      "😀",
+      "\u00A0",
+      "<<<<<<< x\n",
+      "=======\n",
+      ">>>>>>> x\n",
+      "\r"
     };
     for (int seed = 0; seed < 6000; seed++) {
       Random random = new Random(seed);
@@ -257,7 +335,8 @@ class SyntaxRobustnessTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"[", "{", "{a: ", "- ", "[[{a: [", "\"", "a: ", "- a:\n", "? ", "&a [", "!a "})
+  @ValueSource(
+      strings = {"[", "{", "{a: ", "- ", "[[{a: [", "\"", "a: ", "- a:\n", "? ", "&a [", "!a "})
   void deepAndLongTextsEnd(String piece) {
     long start = System.nanoTime();
     checked("a: " + piece.repeat(30_000), "long");
@@ -284,14 +363,17 @@ class SyntaxRobustnessTest {
 
   @Test
   void manyBrokenLinesEnd() {
-    String[] bad = {"k: \"\\q\"\n", "k: [a: b: c, {]\n", "\"k\n", "k: @x: y\n", "k: {a}: b\n", "%x\n", "k: & x\n"};
+    String[] bad = {
+      "k: \"\\q\"\n", "k: [a: b: c, {]\n", "\"k\n", "k: @x: y\n", "k: {a}: b\n", "%x\n", "k: & x\n"
+    };
     StringBuilder text = new StringBuilder();
     for (int i = 0; i < 3000; i++) {
       text.append(bad[i % bad.length]).append("good").append(i).append(": 1\n");
     }
     long start = System.nanoTime();
     SyntaxTree tree = checked(text.toString(), "many");
-    System.out.printf("6000 lines, half of them broken: %d ms%n", (System.nanoTime() - start) / 1_000_000);
+    System.out.printf(
+        "6000 lines, half of them broken: %d ms%n", (System.nanoTime() - start) / 1_000_000);
     assertThat(readings(tree)).containsEntry("good0", "1");
   }
 
