@@ -41,7 +41,7 @@ final class BlockScan {
     int root = rootIndent();
     levels.push(new Level(false, root, root, null));
     for (mending.line = 0; mending.line < mending.text.lineCount(); mending.line++) {
-      Row row = marks.behindStart(mending.row(mending.line), started);
+      Row row = behindStray(marks.behindStart(mending.row(mending.line), started));
       if (!mending.empty(row) && !marks.takesWholeLine(row, started)) {
         line(row);
         started = true;
@@ -52,6 +52,30 @@ final class BlockScan {
       mending.problems.add(
           new Problem(Problem.Kind.SYNTAX, mending.text.place(mend.span), mend.message, fix));
     }
+  }
+
+  /**
+   * A character that begins nothing before a key or a dash: the line is read without it, in the
+   * column where it stood before the character came in.
+   */
+  private Row behindStray(Row row) {
+    int at = row.content();
+    int next = mending.skipBlanks(at + 1);
+    if (!shapes.stray(row, started ? levels.peek().indent : -1)) {
+      return row;
+    }
+    String written = mending.slice(at, at + 1);
+    mending.syntax(
+        at,
+        at + 1,
+        "`" + written + "` does not belong before a key: remove it",
+        mending.guess("Remove `" + written + "`", mending.edit(at, at + 1, "")));
+    int indent = next - row.start() - 1;
+    for (Level level : levels) {
+      indent = level.indent == next - row.start() ? level.indent : indent;
+    }
+    mending.setIndent(new Row(row.number(), row.start(), next, row.end(), 0), indent);
+    return new Row(row.number(), row.start(), next, row.end(), indent);
   }
 
   private int rootIndent() {
@@ -174,6 +198,8 @@ final class BlockScan {
         Level list = new Level(true, row.indent(), drafted, mend);
         levels.push(list);
         item(row, list, at, drafted, mend);
+      } else if (shapes.tightItem(at, row.end())) {
+        strayDash(row, level);
       } else {
         leftOut.dropBlock(row, "a list item stands here where a key is wanted");
       }
@@ -182,6 +208,17 @@ final class BlockScan {
     } else {
       entry(row, level);
     }
+  }
+
+  private void strayDash(Row row, Level level) {
+    int at = row.content();
+    mending.syntax(
+        at,
+        at + 1,
+        "a dash does not belong before a key here: remove it",
+        mending.guess("Remove the dash", mending.edit(at, at + 1, "")));
+    mending.draft.drop(at, at + 1);
+    entry(row, level, at + 1);
   }
 
   private Level below(Level level) {
@@ -279,25 +316,9 @@ final class BlockScan {
       leftOut.dropBlock(row, "a key is missing before this colon");
     } else if (shapes.hasKey(at, row.end())) {
       entry(row, level, at);
-    } else if ("[]{}".indexOf(first) >= 0 && shapes.hasKey(mending.skipBlanks(at + 1), row.end())) {
-      strayBracket(row, level);
     } else {
       leftOut.noColon(row, level);
     }
-  }
-
-  /** A bracket before a key: the key is read without it. */
-  private void strayBracket(Row row, Level level) {
-    int at = row.content();
-    int key = mending.skipBlanks(at + 1);
-    char c = mending.draft.at(at);
-    mending.syntax(
-        at,
-        at + 1,
-        "`" + c + "` does not belong before a key: remove it",
-        mending.guess("Remove `" + c + "`", mending.edit(at, key, "")));
-    mending.draft.drop(at, key);
-    entry(row, level, key);
   }
 
   private void entry(Row row, Level level, int at) {

@@ -32,6 +32,9 @@ final class BlockValues {
     if (at >= end || mending.comment(at)) {
       return Last.OPEN;
     }
+    if (strayMarks(at, row, level)) {
+      return Last.OPEN;
+    }
     if (mending.textKeys.contains(key)) {
       return prose(at, row, level);
     }
@@ -61,6 +64,34 @@ final class BlockValues {
       return secondColon(at, text, row, level);
     }
     return Last.PLAIN;
+  }
+
+  /**
+   * Marks behind a colon or a dash that holds a block: the block is read as if they were not there.
+   */
+  private boolean strayMarks(int at, Row row, Level level) {
+    int end = mending.beforeComment(at, row.end());
+    int next = mending.nextContent(row.number());
+    if (!shapes.onlyMarks(at, end) || shapes.blockHeader(at, row.end()) || next < 0) {
+      return false;
+    }
+    Row below = mending.row(next);
+    boolean item = shapes.isItem(below.content());
+    boolean holds = below.indent() > level.indent || item && below.indent() == level.indent;
+    char c = mending.draft.at(at);
+    boolean flow = (c == '[' || c == '{') && quotes.balanced(at, level.indent) >= 0;
+    boolean quote = (c == '"' || c == '\'') && quotes.closed(at, row.number(), level.indent) >= 0;
+    if (!holds || flow || quote || !item && shapes.isText(below)) {
+      return false;
+    }
+    String written = mending.slice(at, end);
+    mending.syntax(
+        at,
+        end,
+        "`" + written + "` does not belong here: remove it",
+        mending.guess("Remove `" + written + "`", mending.edit(at, end, "")));
+    mending.draft.blank(at, end);
+    return true;
   }
 
   /** Behind the tags, which are told, and the anchors before a value. */

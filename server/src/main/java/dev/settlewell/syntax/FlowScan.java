@@ -162,6 +162,10 @@ final class FlowScan {
 
   private void close(char c) {
     Open top = open.pop();
+    if (c != top.closer() && !open.isEmpty() && open.peek().closer() == c) {
+      notClosed(top, String.valueOf(top.closer()));
+      top = open.pop();
+    }
     if (c != top.closer()) {
       String right = String.valueOf(top.closer());
       mending.syntax(
@@ -172,6 +176,15 @@ final class FlowScan {
       mending.draft.overwrite(at, top.closer());
     }
     advance(at + 1);
+  }
+
+  private void notClosed(Open inner, String closers) {
+    mending.syntax(
+        inner.offset,
+        inner.offset + 1,
+        "`" + inner.bracket + "` is not closed: write `" + closers + "` where it ends",
+        mending.guess("Write `" + closers + "`", mending.edit(last, last, closers)));
+    mending.draft.insert(last, closers);
   }
 
   private void colon() {
@@ -354,12 +367,7 @@ final class FlowScan {
     while (!open.isEmpty()) {
       closers.append(open.pop().closer());
     }
-    mending.syntax(
-        inner.offset,
-        inner.offset + 1,
-        "`" + inner.bracket + "` is not closed: write `" + closers + "` where it ends",
-        mending.guess("Write `" + closers + "`", mending.edit(last, last, closers.toString())));
-    mending.draft.insert(last, closers.toString());
+    notClosed(inner, closers.toString());
   }
 
   private int tooDeep(int start) {

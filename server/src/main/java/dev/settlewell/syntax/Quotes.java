@@ -49,7 +49,8 @@ final class Quotes {
     return end;
   }
 
-  private int closed(int open, int line, int base) {
+  /** Behind the closing quote on this or a deeper line; -1 where there is none. */
+  int closed(int open, int line, int base) {
     int end = endOnLine(open, mending.row(line).end());
     return end >= 0 ? end : endBelow(open, line, base);
   }

@@ -86,4 +86,35 @@ final class Shapes {
     }
     return i == end || mending.gap(i) && mending.comment(mending.skipBlanks(i));
   }
+
+  /** True for a line whose first character begins nothing, before a key or a dash. */
+  boolean stray(Row row, int base) {
+    int at = row.content();
+    char c = mending.draft.at(at);
+    int next = mending.skipBlanks(at + 1);
+    boolean begins = isItem(next) || wordKey(next, row.end());
+    boolean alone = "&*!".indexOf(c) >= 0 && mending.gap(at + 1);
+    if (!begins || !alone && "[]{}\"',%@`|>".indexOf(c) < 0) {
+      return false;
+    }
+    boolean bracket = c == '[' || c == '{';
+    boolean quote = c == '"' || c == '\'';
+    return !(bracket && quotes.balanced(at, base) >= 0)
+        && !(quote && quotes.closed(at, row.number(), base) >= 0);
+  }
+
+  private boolean wordKey(int at, int end) {
+    int colon = colon(at, end);
+    return colon > at && word(at, colon);
+  }
+
+  /** True where the rest of a line is nothing but marks that belong to no word. */
+  boolean onlyMarks(int at, int end) {
+    for (int i = at; i < end; i++) {
+      if ("[]{}\"'`,:@%*|>".indexOf(mending.draft.at(i)) < 0) {
+        return false;
+      }
+    }
+    return at < end;
+  }
 }

@@ -66,6 +66,16 @@ class SyntaxSlipsTest {
         slip("a: [1 V, \"x\" ⟦y⟧]", "{a: [1 V, x, y]}", "comma is missing", "a: [1 V, \"x\", y]"),
         slip("a: {b: [1] ⟦c⟧: 2}", "{a: {b: [1], c: 2}}", "comma is missing", "a: {b: [1], c: 2}"),
         slip("⟦{⟧a: 1~b: 2", "{a: 1, b: 2}", "before a key", "a: 1~b: 2"),
+        slip("a: {b: ⟦[⟧1}~c: 1", "{a: {b: [1]}, c: 1}", "not closed", "a: {b: [1]}~c: 1"),
+        slip(
+            "a:~  b: 1~⟦]⟧  c: 2~  d: 3",
+            "{a: {b: 1, c: 2, d: 3}}",
+            "before a key",
+            "a:~  b: 1~  c: 2~  d: 3"),
+        slip("a:~  ⟦\"⟧b: 1~  d: 3", "{a: {b: 1, d: 3}}", "before a key", "a:~  b: 1~  d: 3"),
+        slip("a: ⟦]⟧~  b: 1~d: 3", "{a: {b: 1}, d: 3}", "does not belong", "a: ~  b: 1~d: 3"),
+        slip("a: ⟦[⟧~  b: 1~d: 3", "{a: {b: 1}, d: 3}", "does not belong", "a: ~  b: 1~d: 3"),
+        slip("a: 1~⟦-⟧b: 1~d: 3", "{a: 1, b: 1, d: 3}", "dash", "a: 1~b: 1~d: 3"),
         // Indentation.
         slip(
             "a:~  b: 1~    ⟦c⟧: 2~  d: 3",
