@@ -1,99 +1,144 @@
--- Drives Neovim's client against a real server: findings, hover, completion, an applied fix.
--- Run by test.sh. Waits for what is to happen, never for a time.
+-- Run by test.sh inside a headless Neovim. Every wait is for a state; a failure ends with exit code 1.
+local patience = tonumber(vim.env.SETTLEWELL_WAIT) * 1000
 
-local function fail(message)
-  io.stderr:write('FAILED: ' .. message .. '\n')
-  vim.cmd('cquit 1')
-end
-
-local function await(what, condition)
-  if not vim.wait(60000, condition, 20) then
-    fail(what .. ' never came')
+local function check(ok, what)
+  if not ok then
+    io.stderr:write("failed: ", what, "\n")
+    vim.cmd("cquit 1")
   end
 end
 
-local sheet = vim.env.SETTLEWELL_TEST_SHEET
-dofile(vim.env.SETTLEWELL_CLIENT)
-vim.cmd('edit ' .. sheet)
-local buffer = vim.api.nvim_get_current_buf()
-
-local function findings()
-  return vim.diagnostic.get(buffer)
+local function wait(what, condition)
+  check(vim.wait(patience, condition, 20), "waited in vain for " .. what)
 end
 
-local function line_of(text)
-  for number, line in ipairs(vim.api.nvim_buf_get_lines(buffer, 0, -1, false)) do
+local function finding(name)
+  for _, found in ipairs(vim.diagnostic.get(0)) do
+    local code = found.code or (found.user_data and found.user_data.lsp.code)
+    if code == name then
+      return found
+    end
+  end
+end
+
+-- Line from 1 and column from 1, in bytes, where `text` first stands.
+local function place(text)
+  for number, line in ipairs(vim.api.nvim_buf_get_lines(0, 0, -1, true)) do
     local column = line:find(text, 1, true)
     if column then
-      return number - 1, column - 1
+      return number, column
     end
   end
-  fail('no line with ' .. text)
+  check(false, "no " .. text .. " in the sheet")
 end
 
-local function request(method, extra, text, offset)
-  local line, column = line_of(text)
-  local params = vim.tbl_extend('force', {
-    textDocument = { uri = vim.uri_from_bufnr(buffer) },
-    position = { line = line, character = column + (offset or 0) },
-  }, extra or {})
-  local answers = vim.lsp.buf_request_sync(buffer, method, params, 60000)
-  for _, answer in pairs(answers or {}) do
-    if answer.error then
-      fail(method .. ': ' .. vim.inspect(answer.error))
+local function go(text)
+  local line, column = place(text)
+  vim.api.nvim_win_set_cursor(0, { line, column - 1 })
+end
+
+local function stands_at(found, text)
+  local line, column = place(text)
+  check(
+    found.lnum == line - 1 and found.col == column - 1,
+    string.format("%s marked at %d:%d", text, found.lnum + 1, found.col + 1)
+  )
+end
+
+local function float()
+  for _, window in ipairs(vim.api.nvim_list_wins()) do
+    if vim.api.nvim_win_get_config(window).relative ~= "" then
+      local lines = vim.api.nvim_buf_get_lines(vim.api.nvim_win_get_buf(window), 0, -1, true)
+      return table.concat(lines, "\n"), window
     end
-    return answer.result
-  end
-  fail(method .. ' was not answered')
-end
-
--- Findings
-await('the finding', function()
-  return #findings() > 0
-end)
-local found = findings()[1]
-if found.code ~= 'acquisition-not-offered' and not found.message:find('offered', 1, true) then
-  fail('another finding: ' .. vim.inspect(found))
-end
-
--- Hover
-local hover = request('textDocument/hover', nil, 'needs:')
-if not hover.contents.value:find('error at 95', 1, true) then
-  fail('hover says ' .. vim.inspect(hover))
-end
-
--- Completion
-local items = request('textDocument/completion', nil, 'voltage:', 2)
-local labels = {}
-for _, item in ipairs(items.items) do
-  labels[item.label] = true
-end
-if not labels.thermistor then
-  fail('completion lacks thermistor')
-end
-
--- A fix, applied as Neovim applies it
-local line = line_of('acquisition: 13')
-local range = {
-  start = { line = line, character = 18 },
-  ['end'] = { line = line, character = 18 },
-}
-local actions =
-  request('textDocument/codeAction', { range = range, context = { diagnostics = {} } }, 'acquisition: 13')
-local fix
-for _, action in ipairs(actions) do
-  if action.kind == 'quickfix' and not action.title:find('Accept', 1, true) then
-    fix = fix or action
   end
 end
-if not fix then
-  fail('no fix among ' .. vim.inspect(actions))
-end
-local client = vim.lsp.get_client_by_id(next(vim.lsp.buf_get_clients(buffer)))
-vim.lsp.util.apply_workspace_edit(fix.edit, client.offset_encoding)
-await('the end of the finding', function()
-  return #findings() == 0
-end)
 
-io.stdout:write('passed: findings, hover, completion, fix\n')
-vim.cmd('qall!')
+local function keys(text)
+  return vim.api.nvim_replace_termcodes(text, true, false, true)
+end
+
+-- The quick fix that a person picks from the menu.
+local function fix(text, title)
+  go(text)
+  local offered = {}
+  vim.ui.select = function(items, options, chosen)
+    for _, item in ipairs(items) do
+      local words = options.format_item(item)
+      table.insert(offered, words)
+      if words:find(title, 1, true) then
+        return chosen(item)
+      end
+    end
+    check(false, title .. " is not among the fixes: " .. table.concat(offered, "; "))
+  end
+  vim.lsp.buf.code_action()
+end
+
+-- A key of a channel, half typed and completed as a person does, with Ctrl-X Ctrl-O. The timer runs
+-- while the editor sits in insert mode; it ends that mode once the menu is there.
+local function complete(words)
+  local menu
+  local deadline = vim.loop.now() + patience
+  local timer = vim.loop.new_timer()
+  timer:start(20, 20, vim.schedule_wrap(function()
+    local items = vim.fn.complete_info({ "items" }).items
+    if not menu and (#items > 0 or vim.loop.now() > deadline) then
+      menu = items
+      timer:stop()
+      vim.api.nvim_feedkeys(keys("<C-y><Esc>"), "n", false)
+    end
+  end))
+  vim.api.nvim_feedkeys(keys("o<C-u>" .. words .. "<C-x><C-o>"), "nx!", false)
+  return menu
+end
+
+local function run()
+  vim.opt.runtimepath:append(vim.env.CLIENT)
+  require("settlewell").setup({ cmd = { vim.env.SETTLEWELL, "serve" } })
+  vim.cmd("edit " .. vim.env.SHEET)
+
+  wait("findings", function()
+    return finding("unknown-name") and finding("acquisition-too-short")
+  end)
+  stands_at(finding("unknown-name"), "reff")
+  stands_at(finding("acquisition-too-short"), "8 cycles")
+  check(#vim.diagnostic.get(0) == 2, "two findings, not " .. #vim.diagnostic.get(0))
+
+  go("8 cycles")
+  vim.api.nvim_feedkeys("K", "x", false)
+  wait("the hover", float)
+  local text, window = float()
+  check(text:find("acquisition", 1, true) and text:find("µs", 1, true), "hover says: " .. text)
+  vim.api.nvim_win_close(window, true)
+
+  vim.opt.completeopt = { "menuone" }
+  go("interferers: []")
+  local menu = complete("    resol")
+  check(menu and #menu > 0, "no completion")
+  check(menu[1].word:find("resolution", 1, true), "completion offers " .. menu[1].word)
+  local line = vim.api.nvim_get_current_line()
+  check(line:find("^    resolution:"), "completion wrote: " .. line)
+  vim.cmd("normal! u")
+  check(vim.fn.search("resol", "nw") == 0, "undo left the completion behind")
+
+  fix("8 cycles", "16 cycles")
+  wait("the acquisition to be mended", function()
+    return vim.fn.search("16 cycles", "nw") > 0 and not finding("acquisition-too-short")
+  end)
+  fix("reff", "`ref`")
+  wait("the name to be mended", function()
+    return vim.fn.search("reff", "nw") == 0 and #vim.diagnostic.get(0) == 0
+  end)
+  vim.cmd("write")
+
+  local client = vim.lsp.get_active_clients()[1]
+  client.stop()
+  wait("the server's end", function()
+    return client.is_stopped()
+  end)
+  vim.cmd("qall!")
+end
+
+local ok, fault = xpcall(run, debug.traceback)
+check(ok, fault)
