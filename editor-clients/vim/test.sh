@@ -1,25 +1,17 @@
-#!/bin/sh
-# Drives Vim with ALE through findings, hover and an edit.
-set -eu
-here=$(CDPATH='' cd "$(dirname "$0")" && pwd)
-ale=${ALE_FOLDER:-/usr/share/vim-ale}
-if ! command -v vim >/dev/null || [ ! -d "$ale" ]; then
-  echo "skipped: Vim with ALE is not installed"
-  exit 0
-fi
-work=$(mktemp -d)
-trap 'rm -rf "$work"' EXIT
-cp "$here/../sample.channels.yaml" "$work/board.channels.yaml"
-mkdir "$work/.git"
-export SETTLEWELL_TEST_SHEET="$work/board.channels.yaml"
-export SETTLEWELL_TEST_RESULT="$work/result"
-cat >"$work/vimrc" <<EOF
-set runtimepath^=$ale
-source $here/test.vim
-source $here/settlewell.vim
-EOF
-status=0
-PATH="$here/../../server/bin:$PATH" TERM=dumb vim -N -i NONE -n --not-a-term -u "$work/vimrc" \
-  </dev/null >/dev/null 2>&1 || status=$?
-cat "$work/result" 2>/dev/null || echo "FAILED: Vim said nothing"
-exit "$status"
+#!/usr/bin/env bash
+# Drives a real Vim with ALE: findings, hover, completion, two quick fixes.
+source "$(dirname "${BASH_SOURCE[0]}")/../testing/common.sh"
+need vim vim
+vim -e -s -N -u NONE -c 'if !has("job") || !has("timers") | cquit | endif | qall!' </dev/null ||
+  skip "this Vim is built without jobs or timers (Debian's package vim)"
+vim -e -s -N -u NONE -c 'packadd ale | if !exists("g:loaded_ale_dont_use_this_in_other_plugins_please") | cquit | endif | qall!' </dev/null ||
+  skip "no ALE for this Vim (Debian's package vim-ale)"
+
+export CLIENT=$clients/vim LOG=$work/log
+# A standard input that never ends and never says anything: at its end Vim would leave.
+mkfifo "$work/silence"
+exec 9<>"$work/silence"
+timeout 300 vim --not-a-term -N -n -i NONE -u NONE -S "$CLIENT/test.vim" <&9 >"$work/screen" 2>&1 ||
+  { cat "$LOG"; failed "see above"; }
+compare
+passed

@@ -1,5 +1,7 @@
 package dev.settlewell.lsp;
 
+import com.google.gson.JsonObject;
+import com.google.gson.JsonPrimitive;
 import dev.settlewell.text.PositionEncoding;
 import java.util.List;
 import java.util.Optional;
@@ -47,7 +49,11 @@ record Abilities(
     boolean progress,
     boolean preparesRename) {
 
-  static Abilities of(ClientCapabilities client) {
+  /**
+   * @param options the client's initialization options. Older clients count columns in bytes and
+   *     cannot say so in their capabilities: then {@code {"positionEncoding": "utf-8"}} there does.
+   */
+  static Abilities of(ClientCapabilities client, Object options) {
     Optional<ClientCapabilities> all = Optional.ofNullable(client);
     Optional<WorkspaceClientCapabilities> workspace = all.map(ClientCapabilities::getWorkspace);
     Optional<TextDocumentClientCapabilities> document = all.map(ClientCapabilities::getTextDocument);
@@ -60,7 +66,7 @@ record Abilities(
     Optional<CodeActionCapabilities> action =
         document.map(TextDocumentClientCapabilities::getCodeAction);
     return new Abilities(
-        encoding(all.map(ClientCapabilities::getGeneral)),
+        encoding(liked(all.map(ClientCapabilities::getGeneral), options)),
         is(publish, PublishDiagnosticsCapabilities::getRelatedInformation),
         is(publish, PublishDiagnosticsCapabilities::getCodeDescriptionSupport),
         is(publish, PublishDiagnosticsCapabilities::getDataSupport),
@@ -121,10 +127,19 @@ record Abilities(
     return formats.map(f -> f.contains(MarkupKind.MARKDOWN)).orElse(false);
   }
 
+  private static List<String> liked(Optional<GeneralClientCapabilities> general, Object options) {
+    return general
+        .map(GeneralClientCapabilities::getPositionEncodings)
+        .orElseGet(
+            () ->
+                options instanceof JsonObject object
+                        && object.get("positionEncoding") instanceof JsonPrimitive encoding
+                    ? List.of(encoding.getAsString())
+                    : List.of());
+  }
+
   /** The first the client likes that we know; UTF-16 where it does not say. */
-  private static PositionEncoding encoding(Optional<GeneralClientCapabilities> general) {
-    List<String> liked =
-        general.map(GeneralClientCapabilities::getPositionEncodings).orElse(List.of());
+  private static PositionEncoding encoding(List<String> liked) {
     for (String encoding : liked) {
       switch (encoding) {
         case "utf-8":

@@ -36,7 +36,8 @@ final class LifeCycle {
   }
 
   private InitializeResult initialize(InitializeParams params) {
-    Abilities abilities = Abilities.of(params.getCapabilities());
+    Abilities abilities =
+        Abilities.of(params.getCapabilities(), params.getInitializationOptions());
     Settings settings =
         params.getInitializationOptions() instanceof JsonElement options
             ? Settings.DEFAULT.with(options)

@@ -20,7 +20,7 @@ final class Session {
     this.worker = new Worker(fault -> faults.report("background work", fault));
     this.view =
         new View(
-            Abilities.of(null), Settings.DEFAULT, Drafts.NONE, List.of(), List.of(), desk);
+            Abilities.of(null, null), Settings.DEFAULT, Drafts.NONE, List.of(), List.of(), desk);
   }
 
   View view() {

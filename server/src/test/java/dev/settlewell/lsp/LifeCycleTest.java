@@ -130,6 +130,24 @@ class LifeCycleTest {
     }
   }
 
+  /** ALE for Vim counts bytes and says nothing of it; a word of the client's own goes before. */
+  @Test
+  void optionsMaySayThePositionEncodingWhereCapabilitiesDoNot() {
+    Map<String, ?> options = Map.of("positionEncoding", "utf-8");
+    try (FakeClient client = new FakeClient(new StandIn())) {
+      JsonObject result =
+          client.initializeWith(
+              Map.of("capabilities", Map.of(), "initializationOptions", options));
+      assertThat(positionEncoding(result)).isEqualTo("utf-8");
+    }
+    try (FakeClient client = new FakeClient(new StandIn())) {
+      Map<String, ?> own = Map.of("general", Map.of("positionEncodings", List.of("utf-16")));
+      JsonObject result =
+          client.initializeWith(Map.of("capabilities", own, "initializationOptions", options));
+      assertThat(positionEncoding(result)).isEqualTo("utf-16");
+    }
+  }
+
   private static String positionEncoding(JsonObject result) {
     return result.getAsJsonObject("capabilities").get("positionEncoding").getAsString();
   }
