@@ -5,12 +5,12 @@ local defaults = {
   -- The command that starts the server. On Windows: { "settlewell.cmd", "serve" }.
   cmd = { "settlewell", "serve" },
   -- What the server's settings are called stands in the README.
-  settings = {},
+  settings = vim.empty_dict(),
   -- Keys of the buffer; give false to set none.
   keys = true,
 }
 
-local running = {} -- client id of each root
+local running = {} -- client of each root, where Neovim does not keep them itself
 
 -- The nearest folder above with `.git` or the project file, else the sheet's own: as the server does.
 local function root_of(path)
@@ -50,25 +50,34 @@ local function attached(options)
   end
 end
 
-local function attach(options, buffer)
-  local root = root_of(vim.api.nvim_buf_get_name(buffer))
-  local id = running[root]
-  if not id then
-    id = vim.lsp.start_client({
-      name = "settlewell",
-      cmd = options.cmd,
-      root_dir = root,
-      settings = { settlewell = options.settings },
-      on_attach = attached(options),
-      on_exit = function()
-        running[root] = nil
-      end,
-    })
-    running[root] = id
+-- Neovim 0.8 and later keep one client a root themselves.
+local function start(config, buffer)
+  if vim.lsp.start then
+    vim.lsp.start(config, { bufnr = buffer })
+    return
+  end
+  local id = running[config.root_dir]
+  if not id or not vim.lsp.get_client_by_id(id) then
+    id = vim.lsp.start_client(config)
+    running[config.root_dir] = id
   end
   if id then
     vim.lsp.buf_attach_client(buffer, id)
   end
+end
+
+local function attach(options, buffer)
+  local root = root_of(vim.api.nvim_buf_get_name(buffer))
+  start({
+    name = "settlewell",
+    cmd = options.cmd,
+    root_dir = root,
+    workspace_folders = { { uri = vim.uri_from_fname(root), name = root } },
+    -- Sent twice: at once, and as the section that later changes go to.
+    init_options = options.settings,
+    settings = { settlewell = options.settings },
+    on_attach = attached(options),
+  }, buffer)
 end
 
 --- Checks every channel sheet that is opened from now on.
