@@ -2,6 +2,7 @@ package dev.settlewell.channel;
 
 import dev.settlewell.circuit.Drive;
 import dev.settlewell.circuit.Element;
+import dev.settlewell.circuit.FrequencyResponse;
 import dev.settlewell.circuit.Ladder;
 import dev.settlewell.circuit.Rung;
 import dev.settlewell.circuit.Sampler;
@@ -279,6 +280,12 @@ final class SettlingCircuit {
       most = Math.max(most, ladder(point, 1, null).dcResistance());
     }
     return most;
+  }
+
+  /** What the last amplifier has to drive at its closed-loop bandwidth, Ω. */
+  double load(Drive.ClosedLoop loop, double[] point) {
+    return FrequencyResponse.loadOhms(
+        ladder(point, 1, null).rungs(), sampler(point), loop.hertz());
   }
 
   boolean hasReservoir() {

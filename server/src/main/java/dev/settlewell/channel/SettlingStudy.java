@@ -145,6 +145,7 @@ final class SettlingStudy {
       figures.add(timing.acquisitionInputs().figure("settling-error", "V"));
       worst = circuit.worst(question.with(longest));
     }
+    amplifierLoad();
     required(allowance, longest);
     timeConstants(known);
     remedies(allowance, known);
@@ -267,6 +268,26 @@ final class SettlingStudy {
         break;
       }
     }
+  }
+
+  /** Below the amplifier's own output resistance the one-pole model no longer holds. */
+  private void amplifierLoad() {
+    ActiveStage active = model.lastActive().orElse(null);
+    if (active == null || !(active.drive() instanceof Drive.ClosedLoop loop)) {
+      return;
+    }
+    figures.add(
+        Figure.of(
+            "amplifier-load",
+            circuit.load(loop, worst.point()),
+            "Ω",
+            "|impedance| behind the last amplifier at its closed-loop bandwidth",
+            operand("closed-loop bandwidth", loop.hertz(), "Hz"),
+            new Figure.Operand(
+                "output-resistance",
+                loop.outputOhms(),
+                "Ω",
+                Optional.of(active.traits().place()))));
   }
 
   /** What a data sheet demands whatever the source: {@code minimum-acquisition}. */

@@ -46,6 +46,7 @@ public final class Catalog {
           new OverRange(),
           new UnderRange(),
           new AmplifierClips(),
+          new AmplifierLoadTooLow(),
           new RangePoorlyUsed(),
           new PinOverstressed(),
           new SensorFaultHidden(),
