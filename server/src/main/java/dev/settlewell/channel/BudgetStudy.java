@@ -9,11 +9,14 @@ import dev.settlewell.uncertainty.MonteCarlo;
 import dev.settlewell.unit.Basis;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.HashMap;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Map;
 import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.function.ToDoubleFunction;
+import java.util.stream.Stream;
 
 /**
  * The error budget of a channel: every reason moved to its limits in the one forward model, at
@@ -91,9 +94,10 @@ final class BudgetStudy {
     Case worst = null;
     double most = Double.NEGATIVE_INFINITY;
     boolean hard = model.judgesWorstCase();
+    Map<Double, Beside> beside = new HashMap<>();
     for (double ambient : model.ambients()) {
       for (double x : model.points()) {
-        Case here = at(x, ambient);
+        Case here = at(x, ambient, beside.computeIfAbsent(x, this::beside));
         double size = hard ? here.hardLimit() : 2 * here.combined() + Math.abs(here.offset());
         // Where needs is a share of the reading, the tightest point is not the largest error.
         double weight = model.needs(x).orElse(1);
@@ -107,19 +111,31 @@ final class BudgetStudy {
     return worst;
   }
 
-  private Case at(double x, double ambient) {
+  /** The rows that do not depend on the ambient. */
+  private record Beside(List<Contribution> settling, List<Contribution> others) {
+    double limits() {
+      return Stream.concat(settling.stream(), others.stream())
+          .mapToDouble(Contribution::limit)
+          .sum();
+    }
+  }
+
+  private Beside beside(double x) {
+    List<Contribution> settled = new ArrayList<>();
+    settlingRows(x, settled);
+    List<Contribution> others = new ArrayList<>(frequency.rows(x));
+    others.addAll(noise.rows(x));
+    others.addAll(noise.droop());
+    return new Beside(settled, others);
+  }
+
+  private Case at(double x, double ambient, Beside beside) {
     List<Contribution> rows = new ArrayList<>();
     double corner = movedRows(x, ambient, rows);
-    settlingRows(x, rows);
-    List<Contribution> beside = new ArrayList<>(frequency.rows(x));
-    beside.addAll(noise.rows(x));
-    beside.addAll(noise.droop());
-    rows.addAll(beside);
+    rows.addAll(beside.settling());
+    rows.addAll(beside.others());
     selfHeating(x, rows);
-    double rest = beside.stream().mapToDouble(Contribution::limit).sum();
-    double settlingLimit =
-        rows.stream().filter(r -> r.name().equals("settling")).mapToDouble(Contribution::limit).sum();
-    return new Case(x, ambient, rows, corner + rest + settlingLimit);
+    return new Case(x, ambient, rows, corner + beside.limits());
   }
 
   /** One row a spread; gives the error with all of them moved together, the larger direction. */

@@ -5,13 +5,17 @@ import dev.settlewell.circuit.Element;
 import dev.settlewell.circuit.FrequencyResponse;
 import dev.settlewell.circuit.Ladder;
 import dev.settlewell.circuit.Rung;
+import dev.settlewell.circuit.SampledLadder;
 import dev.settlewell.circuit.Sampler;
 import dev.settlewell.circuit.Settling;
 import dev.settlewell.circuit.Slewing;
 import dev.settlewell.circuit.Visit;
 import dev.settlewell.circuit.WorstCase;
 import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.OptionalDouble;
 
 /**
@@ -42,6 +46,9 @@ final class SettlingCircuit {
   private final double[] low;
   private final double[] high;
   private final boolean[] corner;
+
+  /** Circuits by their point: both clocks, the need and the neighbour's fault ask about the same. */
+  private final Map<List<Double>, SampledLadder> solved = new HashMap<>();
 
   SettlingCircuit(ChannelModel model, Limits switchOhms, Limits pin, Limits hold) {
     this.model = model;
@@ -197,7 +204,6 @@ final class SettlingCircuit {
 
   private double[][] residuals(
       Question question, double[] point, double scale, Double reservoir) {
-    Ladder ladder = ladder(point, scale, reservoir);
     double x = varies ? point[point.length - 1] : model.measures().low();
     double slew = slewTime(question, point, x);
     List<Visit> visits = question.visits();
@@ -207,7 +213,20 @@ final class SettlingCircuit {
               .map(v -> new Visit(v.start() + slew, Math.max(0, v.acquisition() - slew)))
               .toList();
     }
-    return Settling.residuals(ladder, sampler(point), visits, question.period());
+    return sampled(point, scale, reservoir).residuals(visits, question.period());
+  }
+
+  private SampledLadder sampled(double[] point, double scale, Double reservoir) {
+    if (scale != 1 || reservoir != null) {
+      return new SampledLadder(ladder(point, scale, reservoir), sampler(point));
+    }
+    double[] key = point.clone();
+    if (!varies) {
+      key[key.length - 1] = 0;
+    }
+    return solved.computeIfAbsent(
+        Arrays.stream(key).boxed().toList(),
+        k -> new SampledLadder(ladder(point, 1, null), sampler(point)));
   }
 
   /** Time lost while the last amplifier slews, at the largest step the starts allow. */

@@ -20,8 +20,10 @@ import org.apache.commons.math3.util.FastMath;
  * A summit between two looks that comes near the allowance is searched.
  */
 final class AcquisitionSearch {
-  /** Eight steps an octave. */
+  /** Eight steps an octave, four where nothing rings. */
   private static final double STEP_RATIO = FastMath.pow(2, -1.0 / 8);
+
+  private static final double STEADY_STEP_RATIO = FastMath.pow(2, -1.0 / 4);
 
   private static final int LOOKS_PER_OSCILLATION = 16;
 
@@ -29,7 +31,7 @@ final class AcquisitionSearch {
   private static final double NEGLIGIBLE = 0.03;
 
   /** Of the allowance: between two looks a summit rises by less than the rest. */
-  private static final double NEAR = 0.95;
+  private static final double NEAR = 0.8;
 
   private final SampledLadder sampled;
   private final List<Visit> visits;
@@ -98,9 +100,10 @@ final class AcquisitionSearch {
     }
     startAt(longest);
     double negligible = 1e-3 / sampled.acquiring().map(Propagator::fastestRate).orElse(1.0);
+    double ratio = oscillation == 0 ? STEADY_STEP_RATIO : STEP_RATIO;
     double time = longest;
     while (time > 0) {
-      double next = time > negligible ? time * STEP_RATIO : 0;
+      double next = time > negligible ? time * ratio : 0;
       OptionalDouble crossing =
           next < ringsUntil && time - next > 2 * oscillation
               ? overManyOscillations(next, time)

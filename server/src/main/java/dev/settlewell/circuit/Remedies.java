@@ -3,18 +3,17 @@ package dev.settlewell.circuit;
 import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
 import org.apache.commons.math3.analysis.solvers.BrentSolver;
-import org.apache.commons.math3.util.FastMath;
 
 /**
  * How far a value must move for an error to stay within an allowance.
  *
  * <p>The caller gives the magnitude of the error as a function of the value, worst case over the
- * tolerances included. Neither function needs it monotone: values are walked in steps of a quarter
- * of an octave from the side where the error is expected to be small, and the first value that does
+ * tolerances included. Neither function needs it monotone: values are walked in steps of an octave
+ * from the side where the error is expected to be small, and the first value that does
  * not suffice ends the walk, so that everything between that side and the answer suffices.
  */
 public final class Remedies {
-  private static final double STEP_RATIO = FastMath.pow(2, 0.25);
+  private static final double STEP_RATIO = 2;
   private static final double RELATIVE_ACCURACY = 1e-9;
 
   private Remedies() {}

@@ -14,8 +14,11 @@ import java.util.Optional;
  * the next visit. One period maps x to M x + k, and in the steady state x = M x + k. I - M is
  * composed from what each phase loses, never as a difference, so that a source that hardly recovers
  * within a period costs no digits.
+ *
+ * <p>Worth keeping where one circuit is asked about several times: its motion is solved once. For
+ * use by one thread.
  */
-final class SampledLadder {
+public final class SampledLadder {
   private final int states;
   private final boolean held;
   private final Propagator resting;
@@ -29,7 +32,8 @@ final class SampledLadder {
 
   private final double holdShare;
 
-  SampledLadder(Ladder ladder, Sampler sampler) {
+  /** Solves the motion of the ladder with and without the hold capacitor. */
+  public SampledLadder(Ladder ladder, Sampler sampler) {
     Chain rest = Chain.resting(ladder);
     Chain acquisition = Chain.acquiring(ladder, sampler);
     states = rest.states();
@@ -51,7 +55,7 @@ final class SampledLadder {
   private record Phase(double[][] lost, double[] gained, double[] heldOfState, double heldOfHold) {}
 
   /** See {@link Settling#residuals}. */
-  double[][] residuals(List<Visit> visits, double period) {
+  public double[][] residuals(List<Visit> visits, double period) {
     int count = visits.size();
     if (held) {
       return new double[count][count];
