@@ -19,6 +19,7 @@ import java.util.stream.Stream;
 /**
  * One channel with everything the sheet says of it, ready to compute with.
  *
+ * @param measures the measured range as far as the sensor's curve reaches
  * @param inputs what the forward model lacks; where it is not complete, {@code forward} is null
  * @param ambients the temperatures the budget is made at, °C, rising
  * @param spreads every reason why a reading may be wrong
@@ -58,7 +59,7 @@ record ChannelModel(
         channel,
         part,
         converter,
-        measures,
+        forward == null ? measures : asFarAsKnown(measures, forward.sensor()),
         bench.inputs,
         bench.inputs.complete() ? forward : null,
         bench.parameters.spreads(),
@@ -66,6 +67,19 @@ record ChannelModel(
         bench.parameters.stated(),
         ambients(part, top),
         bench.parameters.typicalOnly());
+  }
+
+  /**
+   * What is measured as far as the sensor's curve reaches; the whole curve where the two do not
+   * meet. That the range leaves the curve is a finding of its own; every other figure is computed
+   * where there is something to compute with.
+   */
+  private static Range asFarAsKnown(Range measures, SensorModel sensor) {
+    double low = Math.max(measures.low(), sensor.low());
+    double high = Math.min(measures.high(), sensor.high());
+    return low < high
+        ? new Range(low, high, measures.unit())
+        : new Range(sensor.low(), sensor.high(), measures.unit());
   }
 
   private static ForwardModel forward(Part part, Optional<Named<Part>> converter, Bench bench) {

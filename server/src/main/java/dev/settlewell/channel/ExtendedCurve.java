@@ -23,4 +23,9 @@ record ExtendedCurve(Curve curve) {
     }
     return curve.at(x);
   }
+
+  /** The same for a resistance: far beyond the domain the straight line stops at 0 Ω. */
+  double ohmsAt(double x) {
+    return Math.max(0, at(x));
+  }
 }

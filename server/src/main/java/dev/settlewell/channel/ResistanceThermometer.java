@@ -90,7 +90,7 @@ record ResistanceThermometer(
   }
 
   private double ohms(double x, double[] p) {
-    double element = p[r0] * new ExtendedCurve(ratio).at(x + p[accuracy] + p[tolerance]);
+    double element = p[r0] * new ExtendedCurve(ratio).ohmsAt(x + p[accuracy] + p[tolerance]);
     return element + 2 * p[leads] + p[mismatch];
   }
 

@@ -77,7 +77,7 @@ record TableSensor(
     double scaled = scale < 0 ? y : y * p[scale] / scaleNominal;
     return switch (output) {
       case CURRENT -> Port.current(scaled, 0);
-      case RESISTANCE -> Port.voltage(from < 0 ? 0 : p[from], y);
+      case RESISTANCE -> Port.voltage(from < 0 ? 0 : p[from], Math.max(0, y));
       default -> Port.voltage(scaled, p[resistance]);
     };
   }

@@ -76,8 +76,8 @@ record ThermistorSensor(
   private double ohms(double x, double[] p) {
     double celsius = x + p[accuracy];
     return beta >= 0
-        ? new ExtendedCurve(Thermistor.beta(p[r25], p[beta])).at(celsius)
-        : new ExtendedCurve(domain).at(celsius) * p[r25] / r25Nominal;
+        ? new ExtendedCurve(Thermistor.beta(p[r25], p[beta])).ohmsAt(celsius)
+        : new ExtendedCurve(domain).ohmsAt(celsius) * p[r25] / r25Nominal;
   }
 
   @Override

@@ -118,6 +118,15 @@ public record Finding(
         name, severity, other, subject, about, message, facts, all, fixes, candidates, acceptance);
   }
 
+  /** The same finding with one more row under it. */
+  public Finding with(Fact more) {
+    List<Fact> all = new ArrayList<>(facts);
+    all.add(more);
+    return new Finding(
+        name, severity, place, subject, about, message, all, related, fixes, candidates,
+        acceptance);
+  }
+
   /** The same finding with one more related place. */
   public Finding with(Related more) {
     List<Related> all = new ArrayList<>(related);

@@ -9,7 +9,9 @@ import dev.settlewell.text.Place;
 import dev.settlewell.text.Span;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.stream.Stream;
 
 /**
@@ -48,7 +50,8 @@ public final class Findings {
     }
     raised.addAll(faultsOfFigures(analysis));
     List<Finding> uncovered = new Covers(checks).uncovered(raised);
-    List<Finding> own = uncovered.stream().map(f -> atHome(f, sheet)).toList();
+    List<Finding> own =
+        onceEach(uncovered).stream().map(f -> atHome(f, sheet)).toList();
     List<Finding> judged = new Acceptances(analysis.linked()).apply(own, raised);
     Severities severities = Severities.of(sheet);
     return judged.stream()
@@ -57,6 +60,24 @@ public final class Findings {
         .distinct()
         .sorted(ORDER)
         .toList();
+  }
+
+  /** Of a channel's finding that several scans raise at one place, the gravest; of equals the first. */
+  private static List<Finding> onceEach(List<Finding> findings) {
+    Map<List<Object>, Finding> gravest = new LinkedHashMap<>();
+    for (Finding finding : findings) {
+      boolean ofAText = finding.subject().isEmpty();
+      gravest.merge(
+          List.of(
+              finding.name(),
+              finding.subject(),
+              finding.about(),
+              finding.place(),
+              ofAText ? finding.message() : ""),
+          finding,
+          (one, other) -> other.severity().compareTo(one.severity()) < 0 ? other : one);
+    }
+    return List.copyOf(gravest.values());
   }
 
   private static List<Finding> isolated(Check check, Analysis analysis) {

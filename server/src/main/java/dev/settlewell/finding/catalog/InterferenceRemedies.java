@@ -100,8 +100,10 @@ final class InterferenceRemedies {
     }
     double before =
         Averaging.worstEvenGain(line.low(), line.high(), 1 / longest, 1 / shortest, present);
+    double band = channel.value("band").orElse(0);
+    int mostForBand = band > 0 ? (int) (visits / longest / (2 * band)) : LARGEST_MEAN;
     return Averaging.countFor(
-        before * share, line.low(), line.high(), 1 / longest, 1 / shortest, LARGEST_MEAN);
+        before * share, line.low(), line.high(), 1 / longest, 1 / shortest, Math.min(LARGEST_MEAN, mostForBand));
   }
 
   private Optional<Fix> average(int count) {

@@ -72,7 +72,7 @@ final class SpanExcess {
         .related(
             channel.converter().map(part -> part.slot("reference").place()),
             "the reference of the span")
-        .candidate(above && limit > 0 ? smaller(limit / voltage) : Optional.empty())
+        .candidate(above && limit > 0 ? smaller(fitting(limit / voltage)) : Optional.empty())
         .build();
   }
 
@@ -80,6 +80,12 @@ final class SpanExcess {
     return above && limit > 0
         ? "at most " + Words.share(limit / voltage) + " of the signal fit"
         : "raise the level of the path, or narrow what is measured";
+  }
+
+  /** What is left of the signal where its worst fits too. */
+  private double fitting(double nominal) {
+    double worst = channel.number("pin-share-worst-high");
+    return worst > 1 ? Math.min(nominal, 1 / worst) : nominal;
   }
 
   private Optional<Fix> smaller(double factor) {
