@@ -226,10 +226,7 @@ final class Binder {
       Place keyPlace,
       String pointer,
       Scope scope) {
-    boolean inPieces =
-        kind.keys().values().stream()
-            .anyMatch(k -> k.partOf().filter(key.name()::equals).isPresent()
-                && entries.find(k.name()).isPresent());
+    boolean inPieces = kind.shortKey().filter(key.name()::equals).isPresent() && hasPieces(kind, entries);
     if (inPieces) {
       return longForm.read(key, entries, keyPlace, mapping.place(), pointer, scope);
     }
@@ -239,6 +236,16 @@ final class Binder {
       return new Slot.Missing<>(keyPlace, below);
     }
     return value(key, entry.get().value(), entry.get().key().place(), below, scope);
+  }
+
+  /** True where the mapping holds pieces of the long form of its kind's one value. */
+  private static boolean hasPieces(Kind kind, Entries entries) {
+    for (String name : entries.byKey().keySet()) {
+      if (kind.key(name).flatMap(Key::partOf).isPresent()) {
+        return true;
+      }
+    }
+    return false;
   }
 
   /** Binds first what decides how the rest is read, and keeps its slot. */
