@@ -30,10 +30,11 @@ final class Output {
     }
   }
 
-  /** One line about the run itself. */
+  /** One line about the run itself; what names of files hold must not command a terminal. */
   void note(String line) {
     try {
-      write(console.err(), "settlewell: " + line + "\n");
+      String shown = line.replaceAll("[\\p{Cc}\\p{Cf}]", "\uFFFD");
+      write(console.err(), "settlewell: " + shown + "\n");
     } catch (IOException e) {
       // Nobody is left who could be told.
     }

@@ -124,6 +124,7 @@ class CheckCommandTest {
     write("evil.channels.yaml", Boards.CLEAN.replace("±0.2 V", "\"\u009b31m\u202e±x\""));
     String out = Typed.in(folder, "check", "evil.channels.yaml").out();
     assertThat(out).contains("evil.channels.yaml:").doesNotContain("\u009b", "\u202e");
+    assertThat(Typed.in(folder, "check", "\u001b[2J").err()).doesNotContain("\u001b");
   }
 
   /** U+1F321 is one character, two units of UTF-16 and two columns of a terminal. */
