@@ -213,7 +213,8 @@ final class Acceptances {
     String tail = text.slice(new Span(entry.item().end(), text.line(last).end()));
     boolean ownLines =
         only
-            ? head.matches("(?s)[ \\t]*accept[ \\t]*:.*") && tail.matches("[ \\t]*\\]?[ \\t]*(#.*)?")
+            ? head.matches("(?s)[ \\t]*accept[ \\t]*:.*")
+                && tail.matches("[ \\t]*\\]?[ \\t]*(#.*)?")
             : head.matches("[ \\t]*-[ \\t]+") && tail.matches("[ \\t]*(#.*)?");
     if (!ownLines) {
       return Optional.empty();

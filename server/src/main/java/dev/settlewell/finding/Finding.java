@@ -54,7 +54,16 @@ public record Finding(
       List<Fix> fixes,
       Optional<Acceptance> acceptance) {
     this(
-        name, severity, place, subject, about, message, facts, related, fixes, List.of(),
+        name,
+        severity,
+        place,
+        subject,
+        about,
+        message,
+        facts,
+        related,
+        fixes,
+        List.of(),
         acceptance);
   }
 
@@ -67,7 +76,16 @@ public record Finding(
       List<Fact> facts,
       List<Related> related) {
     this(
-        name, severity, place, subject, "", message, facts, related, List.of(), List.of(),
+        name,
+        severity,
+        place,
+        subject,
+        "",
+        message,
+        facts,
+        related,
+        List.of(),
+        List.of(),
         Optional.empty());
   }
 
@@ -105,7 +123,16 @@ public record Finding(
 
   public Finding withFixes(List<Fix> others) {
     return new Finding(
-        name, severity, place, subject, about, message, facts, related, others, candidates,
+        name,
+        severity,
+        place,
+        subject,
+        about,
+        message,
+        facts,
+        related,
+        others,
+        candidates,
         acceptance);
   }
 
@@ -123,7 +150,16 @@ public record Finding(
     List<Fact> all = new ArrayList<>(facts);
     all.add(more);
     return new Finding(
-        name, severity, place, subject, about, message, all, related, fixes, candidates,
+        name,
+        severity,
+        place,
+        subject,
+        about,
+        message,
+        all,
+        related,
+        fixes,
+        candidates,
         acceptance);
   }
 

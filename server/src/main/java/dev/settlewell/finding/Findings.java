@@ -50,8 +50,7 @@ public final class Findings {
     }
     raised.addAll(faultsOfFigures(analysis));
     List<Finding> uncovered = new Covers(checks).uncovered(raised);
-    List<Finding> own =
-        onceEach(uncovered).stream().map(f -> atHome(f, sheet)).toList();
+    List<Finding> own = onceEach(uncovered).stream().map(f -> atHome(f, sheet)).toList();
     List<Finding> judged = new Acceptances(analysis.linked()).apply(own, raised);
     Severities severities = Severities.of(sheet);
     return judged.stream()
@@ -62,7 +61,9 @@ public final class Findings {
         .toList();
   }
 
-  /** Of a channel's finding that several scans raise at one place, the gravest; of equals the first. */
+  /**
+   * Of a channel's finding that several scans raise at one place, the gravest; of equals the first.
+   */
   private static List<Finding> onceEach(List<Finding> findings) {
     Map<List<Object>, Finding> gravest = new LinkedHashMap<>();
     for (Finding finding : findings) {

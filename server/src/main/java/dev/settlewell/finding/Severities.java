@@ -48,7 +48,9 @@ final class Severities {
     }
   }
 
-  /** A fault of this program stays as it is: switching it off would hide that nothing was judged. */
+  /**
+   * A fault of this program stays as it is: switching it off would hide that nothing was judged.
+   */
   Finding apply(Finding finding) {
     Severity severity = stated.get(finding.name());
     boolean fixed = severity == null || finding.name().equals(Findings.INTERNAL_FAULT);

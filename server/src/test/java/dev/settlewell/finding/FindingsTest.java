@@ -44,14 +44,11 @@ class FindingsTest {
           """;
 
   /** A check that does what the test says. */
-  private record Told(
-      String name, List<String> covers, BiConsumer<Check, Consumer<Finding>> does)
+  private record Told(String name, List<String> covers, BiConsumer<Check, Consumer<Finding>> does)
       implements Check {
     static Told finding(String name, String subject, String about, String... covers) {
       return new Told(
-          name,
-          List.of(covers),
-          (check, report) -> report.accept(Told.at(check, subject, about)));
+          name, List.of(covers), (check, report) -> report.accept(Told.at(check, subject, about)));
     }
 
     private static Finding at(Check check, String subject, String about) {
@@ -85,9 +82,7 @@ class FindingsTest {
   }
 
   private static List<String> names(Check... checks) {
-    return Findings.of(Judged.analysis(TANK), List.of(checks)).stream()
-        .map(Finding::name)
-        .toList();
+    return Findings.of(Judged.analysis(TANK), List.of(checks)).stream().map(Finding::name).toList();
   }
 
   @Test
@@ -100,8 +95,7 @@ class FindingsTest {
               throw new IllegalStateException("no such thing");
             });
     List<Finding> findings =
-        Findings.of(
-            Judged.analysis(TANK), List.of(failing, Told.finding("sound", "level", "")));
+        Findings.of(Judged.analysis(TANK), List.of(failing, Told.finding("sound", "level", "")));
     assertThat(findings)
         .extracting(Finding::name)
         .containsExactlyInAnyOrder(Findings.INTERNAL_FAULT, "sound");
@@ -194,8 +188,8 @@ class FindingsTest {
     String two =
         ACCEPTED.replace("        until: 2026-06-30\n", "")
             + "      - finding: over-range\n        because: no longer\n";
-    assertThat(mended(two, "acceptance-unused")).isEqualTo(two.substring(0, two.indexOf(
-        "      - finding: over-range")));
+    assertThat(mended(two, "acceptance-unused"))
+        .isEqualTo(two.substring(0, two.indexOf("      - finding: over-range")));
   }
 
   private static String mended(String sheet, String name) {
@@ -210,7 +204,9 @@ class FindingsTest {
   @Test
   void whileTheTextHasErrorsNoAcceptanceIsCalledIdle() {
     String broken =
-        ACCEPTED.replace("output: 0 mA to 20 mA", "output: 0 to 20 mA").replace("2026-06-30", "2030-01-01");
+        ACCEPTED
+            .replace("output: 0 mA to 20 mA", "output: 0 to 20 mA")
+            .replace("2026-06-30", "2030-01-01");
     String worse = broken.replace("measures: 0 m to 3 m", "measures: 3 m to 0 m");
     assertThat(Judged.sheet(worse).names()).doesNotContain("acceptance-unused");
   }
@@ -227,7 +223,7 @@ class FindingsTest {
               assertThat(f.fixes().get(0).applyTo(Judged.sheet(slip).text())).isEqualTo(ACCEPTED);
             });
     assertThat(Judged.sheet(TANK + "findings: {over-rang: off}\n").shown())
-        .anyMatch(line -> line.contains("unknown-name ‹over-rang›") && line.contains("over-range"));
+        .anyMatch(said -> said.contains("unknown-name ‹over-rang›") && said.contains("over-range"));
   }
 
   @Test
@@ -244,10 +240,11 @@ class FindingsTest {
         TANK.replaceAll("supplies: .*\n", "use: [parts.channels.yaml]\n")
             .replaceAll("converters:\n.*\n", "");
     Judged judged = Judged.with(own, "parts.channels.yaml", parts);
-    assertThat(judged.findings())
-        .allMatch(f -> f.place().sheet().equals(judged.text().name()));
+    assertThat(judged.findings()).allMatch(f -> f.place().sheet().equals(judged.text().name()));
     // The used sheet's own text and converter are judged there.
-    assertThat(judged.names()).contains("typical-only").doesNotContain("unknown-key", "missing-codes");
+    assertThat(judged.names())
+        .contains("typical-only")
+        .doesNotContain("unknown-key", "missing-codes");
     assertThat(judged.findings())
         .filteredOn(f -> f.name().equals("typical-only"))
         .allMatch(f -> f.related().get(0).place().sheet().endsWith("parts.channels.yaml"));
@@ -287,14 +284,16 @@ class FindingsTest {
               .findings();
       List<Finding> sorted = new ArrayList<>(findings);
       sorted.sort(byPlace);
-      assertThat(findings).extracting(Finding::name).containsExactlyElementsOf(
-          sorted.stream().map(Finding::name).toList());
+      assertThat(findings)
+          .extracting(Finding::name)
+          .containsExactlyElementsOf(sorted.stream().map(Finding::name).toList());
     }
   }
 
   @Test
   void anyTextHasFindingsAndNoFaults() {
-    String whole = Pages.of("acquisition-too-short").orElseThrow().sheet("A sheet that has it").orElseThrow();
+    String whole =
+        Pages.of("acquisition-too-short").orElseThrow().sheet("A sheet that has it").orElseThrow();
     Stream.iterate(0, at -> at < whole.length(), at -> at + 23)
         .map(at -> whole.substring(0, at))
         .forEach(

@@ -43,8 +43,7 @@ record Judged(SourceText text, List<Finding> findings) {
   }
 
   private static Judged on(LocalDate date, Map<String, String> files) {
-    return new Judged(
-        SourceText.of(PATH, files.get(PATH)), Findings.of(analysis(date, files)));
+    return new Judged(SourceText.of(PATH, files.get(PATH)), Findings.of(analysis(date, files)));
   }
 
   private record Files(Map<String, String> texts) implements SheetReader {

@@ -16,7 +16,8 @@ import org.junit.jupiter.api.Test;
  */
 class MutatedSheetsTest {
   private static final int MUTANTS = Integer.getInteger("settlewell.mutants", 150);
-  private static final Pattern NUMBER = Pattern.compile("(?<=[ {\\[-])[0-9]+(\\.[0-9]+)?(?=[ ,%}\\]])");
+  private static final Pattern NUMBER =
+      Pattern.compile("(?<=[ {\\[-])[0-9]+(\\.[0-9]+)?(?=[ ,%}\\]])");
   private static final List<String> FACTORS = List.of("0", "0.001", "1000", "7", "-1", "1e9");
 
   @Test
@@ -31,8 +32,11 @@ class MutatedSheetsTest {
       String sheet = mutated(sheets.get(random.nextInt(sheets.size())), random);
       Judged judged = Judged.sheet(sheet);
       for (Finding finding : judged.findings()) {
-        String told = finding.message() + finding.facts() + finding.related() + finding.candidates();
-        assertThat(finding.name()).as("seed %d%n%s%n%s", seed, sheet, told).isNotEqualTo(Findings.INTERNAL_FAULT);
+        String told =
+            finding.message() + finding.facts() + finding.related() + finding.candidates();
+        assertThat(finding.name())
+            .as("seed %d%n%s%n%s", seed, sheet, told)
+            .isNotEqualTo(Findings.INTERNAL_FAULT);
         assertThat(told)
             .as("seed %d%n%s", seed, sheet)
             .doesNotContain("NaN")

@@ -13,7 +13,8 @@ import org.junit.jupiter.api.Test;
 
 /** A computed value is offered only where the changed sheet shows that it helps. */
 class RemediesTest {
-  private static final SourceText TEXT = SourceText.of("t.channels.yaml", "acquisition: 6 cycles\n");
+  private static final SourceText TEXT =
+      SourceText.of("t.channels.yaml", "acquisition: 6 cycles\n");
   private static final Fix LONGER =
       new Fix("Acquire for 12 cycles", List.of(new Edit(TEXT.place(13, 21), "12 cycles")), false);
 
@@ -56,7 +57,8 @@ class RemediesTest {
   @Test
   void whatLeavesItIsNot() {
     Finding tooShort = finding("acquisition-too-short", Severity.WARNING, LONGER);
-    assertThat(offered(tooShort, List.of(tooShort), finding("acquisition-too-short", Severity.HINT)))
+    assertThat(
+            offered(tooShort, List.of(tooShort), finding("acquisition-too-short", Severity.HINT)))
         .isEmpty();
   }
 
@@ -85,8 +87,7 @@ class RemediesTest {
 
   @Test
   void aPlainFixNeedsNoProof() {
-    Finding plain =
-        finding("unknown-key", Severity.ERROR).withFixes(List.of(LONGER));
+    Finding plain = finding("unknown-key", Severity.ERROR).withFixes(List.of(LONGER));
     List<Fix> offered =
         Remedies.offered(
             TEXT,

@@ -39,7 +39,8 @@ final class AccumulatorOverflows extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "accumulator")
             .message(
-                "the sum of %s full-scale codes takes %s bits, the accumulator has %s; a mean of about %s would fit"
+                ("the sum of %s full-scale codes takes %s bits, the accumulator has %s; a"
+                        + " mean of about %s would fit")
                     .formatted(
                         Words.count(average),
                         Words.count(needed),

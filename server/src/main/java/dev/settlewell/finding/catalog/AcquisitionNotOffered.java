@@ -35,7 +35,8 @@ final class AcquisitionNotOffered extends ChannelCheck {
   void check(ChannelView channel, Consumer<Finding> report) {
     Optional<Toleranced> stated =
         channel.part().either("acquisition").stated().flatMap(Either::quantity);
-    List<Double> offered = channel.converter().map(AcquisitionNotOffered::offered).orElse(List.of());
+    List<Double> offered =
+        channel.converter().map(AcquisitionNotOffered::offered).orElse(List.of());
     if (stated.isEmpty()
         || stated.get().unit().dimension() != Dimension.CYCLES
         || offered.isEmpty()) {

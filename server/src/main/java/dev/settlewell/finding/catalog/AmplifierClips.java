@@ -1,8 +1,8 @@
 package dev.settlewell.finding.catalog;
 
+import dev.settlewell.channel.OutputRange;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
-import dev.settlewell.channel.OutputRange;
 import java.util.function.Consumer;
 
 /** An amplifier of the path is asked for more than its output can reach. */
@@ -43,15 +43,15 @@ final class AmplifierClips extends ChannelCheck {
     String reached = Words.range(low, high, "V");
     String message =
         "the output must go from %s%s and can go from %s; %s"
-            .formatted(reached, nominal ? "" : " with all tolerances", swing, mend(output, low, high));
+            .formatted(
+                reached, nominal ? "" : " with all tolerances", swing, mend(output, low, high));
     return FindingBuilder.of(this, output.place(), channel.name())
         .severity(nominal ? Severity.ERROR : Severity.WARNING)
         .about(label(channel, output))
         .message(message)
         .need("within " + swing)
         .have(reached)
-        .margin(
-            Words.of(Math.min(output.swingHigh() - high, low - output.swingLow()), "V"))
+        .margin(Words.of(Math.min(output.swingHigh() - high, low - output.swingLow()), "V"))
         .related(output.swingPlace(), "what the output can reach")
         .related(channel.stated("measures"), "what is measured")
         .build();

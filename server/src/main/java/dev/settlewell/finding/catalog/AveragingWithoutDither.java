@@ -32,7 +32,9 @@ final class AveragingWithoutDither extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "average")
             .message(
-                "with %s of noise the mean keeps a bias of %s rms, more than the %s that averaging leaves; about 0.5 LSB of noise in front of the converter would let it work"
+                ("with %s of noise the mean keeps a bias of %s rms, more than the %s that averaging"
+                     + " leaves; about 0.5 LSB of noise in front of the converter would let it"
+                     + " work")
                     .formatted(
                         Words.lsb(channel.number("noise-lsb")), Words.lsb(bias), Words.lsb(rest)))
             .need("at most " + Words.lsb(rest))

@@ -29,7 +29,8 @@ final class BudgetExcess {
     List<BudgetRow> largest = largest();
     BudgetRow first = largest.get(0);
     String message =
-        "%s of ±%s exceeds the ±%s needed, at %s and %s; the largest row is %s with ±%s, without it about ±%s would remain"
+        ("%s of ±%s exceeds the ±%s needed, at %s and %s; the largest row is %s with ±%s,"
+                + " without it about ±%s would remain")
             .formatted(
                 what,
                 of(budget.judged()),

@@ -62,7 +62,8 @@ final class ConverterOvercommitted implements Check {
     boolean tooMuch = use > 1;
     String message =
         tooMuch
-            ? "the scans ask for %s of the converter's time; their rates must come down to %s of what they are"
+            ? ("the scans ask for %s of the converter's time; their rates must come down to"
+                    + " %s of what they are")
                 .formatted(Words.share(use), Words.share(1 / use))
             : "the scans use %s of the converter's time; %s are left"
                 .formatted(Words.share(use), Words.share(1 - use));

@@ -46,7 +46,8 @@ final class FilterDroop extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "band")
             .message(
-                "%s of the signal is lost at the band's edge of %s%s; the corner of the path lies at %s, a first-order one would have to be at %s"
+                ("%s of the signal is lost at the band's edge of %s%s; the corner of the"
+                        + " path lies at %s, a first-order one would have to be at %s")
                     .formatted(
                         Words.share(droop),
                         Words.of(channel.number("band"), "Hz"),
@@ -54,8 +55,7 @@ final class FilterDroop extends ChannelCheck {
                         Words.of(channel.number("corner-frequency"), "Hz"),
                         Words.of(corner(channel, share), "Hz")))
             .candidate(smallerCapacitor(channel, share))
-            .need(
-                tooMuch ? "at most " + Words.of(allowed, channel.unit()) : Words.share(ALLOWED))
+            .need(tooMuch ? "at most " + Words.of(allowed, channel.unit()) : Words.share(ALLOWED))
             .have(Words.share(droop))
             .related(channel.stated("average"), "the average takes its part")
             .related(channel.lastStage("capacitor").map(s -> s.part().place()), "the capacitor")

@@ -49,7 +49,9 @@ final class HazardousVoltage extends ChannelCheck {
     worst.ifPresent(voltage -> judge(channel, voltage, report));
   }
 
-  /** What stands at the sensor's terminal: stated for a fault, as its output, or measured itself. */
+  /**
+   * What stands at the sensor's terminal: stated for a fault, as its output, or measured itself.
+   */
   private static Iterable<Slot<Range>> voltages(ChannelView channel) {
     java.util.List<Slot<Range>> slots = new java.util.ArrayList<>();
     slots.add(channel.part().range("overload"));
@@ -77,12 +79,11 @@ final class HazardousVoltage extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, voltage.place(), channel.name())
             .message(
-                "%s stand at this input, above the touch limit of %s%s in %s places: insulation, creepage, clearance, fusing and isolation are outside this tool; local codes and licensed practice decide"
+                ("%s stand at this input, above the touch limit of %s%s in %s places:"
+                        + " insulation, creepage, clearance, fusing and isolation are outside this"
+                        + " tool; local codes and licensed practice decide")
                     .formatted(
-                        Words.of(present, "V"),
-                        Words.of(limit, "V"),
-                        kind,
-                        wet ? "wet" : "dry"))
+                        Words.of(present, "V"), Words.of(limit, "V"), kind, wet ? "wet" : "dry"))
             .need("at most " + Words.of(limit, "V") + kind)
             .have(Words.of(present, "V"))
             .build());

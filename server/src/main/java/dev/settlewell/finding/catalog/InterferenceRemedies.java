@@ -89,7 +89,9 @@ final class InterferenceRemedies {
         "Lower the corner with " + value + " at the pin");
   }
 
-  /** The smallest mean that takes the line out, at the rate of the visits; empty where none does. */
+  /**
+   * The smallest mean that takes the line out, at the rate of the visits; empty where none does.
+   */
   private OptionalInt mean() {
     double longest = channel.scanNumber("scan-period-longest");
     double shortest = channel.scanNumber("scan-period");
@@ -103,7 +105,12 @@ final class InterferenceRemedies {
     double band = channel.value("band").orElse(0);
     int mostForBand = band > 0 ? (int) (visits / longest / (2 * band)) : LARGEST_MEAN;
     return Averaging.countFor(
-        before * share, line.low(), line.high(), 1 / longest, 1 / shortest, Math.min(LARGEST_MEAN, mostForBand));
+        before * share,
+        line.low(),
+        line.high(),
+        1 / longest,
+        1 / shortest,
+        Math.min(LARGEST_MEAN, mostForBand));
   }
 
   private Optional<Fix> average(int count) {

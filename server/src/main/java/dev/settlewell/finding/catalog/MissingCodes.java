@@ -33,10 +33,7 @@ final class MissingCodes implements Check {
   @Override
   public void run(Analysis analysis, Consumer<Finding> report) {
     for (Named<Part> converter : analysis.linked().sheet().converters().values()) {
-      converter
-          .value()
-          .stated()
-          .ifPresent(part -> check(converter.name(), part, report));
+      converter.value().stated().ifPresent(part -> check(converter.name(), part, report));
     }
   }
 
@@ -56,9 +53,11 @@ final class MissingCodes implements Check {
     }
     String message =
         beyond
-            ? "a differential non-linearity of -%s takes more than a whole code away: codes may be missing, and steps be twice as large"
+            ? ("a differential non-linearity of -%s takes more than a whole code away:"
+                    + " codes may be missing, and steps be twice as large")
                 .formatted(Words.lsb(down))
-            : "a differential non-linearity of -1 LSB leaves codes of no width; say `no-missing-codes: true` where the data sheet promises that there are none";
+            : "a differential non-linearity of -1 LSB leaves codes of no width; say"
+                + " `no-missing-codes: true` where the data sheet promises that there are none";
     report.accept(
         FindingBuilder.of(this, part.slot("differential-nonlinearity").place(), converter)
             .severity(beyond ? Severity.WARNING : Severity.INFORMATION)

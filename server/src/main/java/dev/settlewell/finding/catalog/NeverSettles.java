@@ -46,7 +46,8 @@ final class NeverSettles extends ChannelCheck {
             .map(ohms -> "the source resistance would have to be at most " + ohms)
             .orElse("only a lower rate, or an amplifier in front of the pin, would");
     String message =
-        "%s stay unsettled after %s, and neither a longer acquisition nor a larger capacitor at the pin mends it; %s"
+        ("%s stay unsettled after %s, and neither a longer acquisition nor a larger"
+                + " capacitor at the pin mends it; %s")
             .formatted(Words.lsb(settling.error()), settling.have(), would);
     report.accept(
         settling
@@ -71,7 +72,8 @@ final class NeverSettles extends ChannelCheck {
 
   private static Optional<Fix> lowerResistor(ChannelView channel, SettlingJudgement settling) {
     Optional<Part> resistor = settling.onlyResistor();
-    double tooMuch = channel.number("source-resistance") - channel.number("largest-source-resistance");
+    double tooMuch =
+        channel.number("source-resistance") - channel.number("largest-source-resistance");
     double value =
         resistor
             .flatMap(part -> part.quantity("value").stated())

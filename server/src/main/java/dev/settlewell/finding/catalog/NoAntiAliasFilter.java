@@ -39,7 +39,9 @@ final class NoAntiAliasFilter extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel.keyPlace("path"), channel.name())
             .message(
-                "%s, above half the scan rate of %s: whatever disturbs the sensor folds into the readings; filter below it, average, or say `interferers: []` where there are none"
+                ("%s, above half the scan rate of %s: whatever disturbs the sensor folds"
+                        + " into the readings; filter below it, average, or say `interferers: []`"
+                        + " where there are none")
                     .formatted(where, Words.of(half, "Hz")))
             .need("a corner below " + Words.of(half, "Hz"))
             .have(Double.isInfinite(corner) ? "none" : Words.of(corner, "Hz"))
@@ -49,8 +51,7 @@ final class NoAntiAliasFilter extends ChannelCheck {
   /** NaN where it is not known, infinite where the path lets everything through. */
   private static double corner(ChannelView channel) {
     Optional<Figure> figure = channel.figure("corner-frequency");
-    boolean open =
-        figure.map(f -> f.state() instanceof Figure.State.Unlimited).orElse(false);
+    boolean open = figure.map(f -> f.state() instanceof Figure.State.Unlimited).orElse(false);
     return open ? Double.POSITIVE_INFINITY : channel.number("corner-frequency");
   }
 }

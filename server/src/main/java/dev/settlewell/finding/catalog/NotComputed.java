@@ -46,8 +46,7 @@ final class NotComputed implements Check {
     }
   }
 
-  private Finding notYet(
-      Analysis analysis, Map<String, List<ChannelView>> channels, Place key) {
+  private Finding notYet(Analysis analysis, Map<String, List<ChannelView>> channels, Place key) {
     String subject =
         channels.entrySet().stream()
             .filter(e -> e.getValue().get(0).part().place().span().contains(key.span()))

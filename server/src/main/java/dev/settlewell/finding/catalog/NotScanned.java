@@ -47,9 +47,11 @@ final class NotScanned implements Check {
       }
       String message =
           sheet.scans().isEmpty()
-              ? name + " is never sampled: the sheet has no scan; its settling, timing and"
+              ? name
+                  + " is never sampled: the sheet has no scan; its settling, timing and"
                   + " interference cannot be judged"
-              : name + " is never sampled: it stands in no scan's order; add it there, or its"
+              : name
+                  + " is never sampled: it stands in no scan's order; add it there, or its"
                   + " settling, timing and interference cannot be judged";
       FindingBuilder finding =
           FindingBuilder.of(this, channel.channel().place(), name).message(message);
@@ -80,8 +82,8 @@ final class NotScanned implements Check {
 
   private static boolean isClear(Part scan, Sheet sheet) {
     return scan.list("order", String.class).stated().orElse(List.of()).stream()
-        .map(Slot::stated)
-        .allMatch(item -> item.isPresent() && sheet.channels().containsKey(item.get()))
+            .map(Slot::stated)
+            .allMatch(item -> item.isPresent() && sheet.channels().containsKey(item.get()))
         && !scan.slot("order").isWrong();
   }
 }

@@ -35,7 +35,8 @@ final class OutsideCurve extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "measures")
             .message(
-                "%s are to be measured, and the curve of the sensor is known from %s only; keep inside, or use a sensor that reaches further"
+                ("%s are to be measured, and the curve of the sensor is known from %s only;"
+                        + " keep inside, or use a sensor that reaches further")
                     .formatted(
                         Words.range(measures.get().low(), measures.get().high(), unit),
                         Words.range(low, high, unit)))

@@ -1,8 +1,8 @@
 package dev.settlewell.finding.catalog;
 
+import dev.settlewell.channel.Figure;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
-import dev.settlewell.channel.Figure;
 import dev.settlewell.text.Fix;
 import dev.settlewell.unit.PreferredValues;
 import dev.settlewell.unit.PreferredValues.Series;

@@ -1,9 +1,9 @@
 package dev.settlewell.finding.catalog;
 
-import dev.settlewell.finding.Finding;
-import dev.settlewell.finding.Severity;
 import dev.settlewell.channel.Budget;
 import dev.settlewell.channel.BudgetRow;
+import dev.settlewell.finding.Finding;
+import dev.settlewell.finding.Severity;
 import java.util.function.Consumer;
 
 /** A small share of the span is used, and what scales with an LSB counts. */
@@ -37,7 +37,8 @@ final class RangePoorlyUsed extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "measures")
             .message(
-                "the signal uses %s of the span, and %s of the variance comes from errors that scale with it; up to %s times the gain, or a span down to %s, fit"
+                ("the signal uses %s of the span, and %s of the variance comes from errors"
+                        + " that scale with it; up to %s times the gain, or a span down to %s, fit")
                     .formatted(
                         Words.share(used),
                         Words.share(share),

@@ -44,9 +44,12 @@ final class ReservoirTooSmall extends ChannelCheck {
     String needed = Words.of(smallest, "F") + " (" + part + " of E6)";
     Optional<Slot<?>> reservoir = settling.reservoir();
     String present =
-        reservoir.map(slot -> "the capacitor at the pin leaves ").orElse("no capacitor at the pin: ");
+        reservoir
+            .map(slot -> "the capacitor at the pin leaves ")
+            .orElse("no capacitor at the pin: ");
     String message =
-        "%s%s unsettled after %s, and no acquisition that fits mends it; needs at least %s at the pin"
+        ("%s%s unsettled after %s, and no acquisition that fits mends it; needs at least %s"
+                + " at the pin")
             .formatted(present, Words.lsb(settling.error()), settling.have(), needed);
     Place place = reservoir.map(Slot::place).orElse(channel.keyPlace("path"));
     report.accept(

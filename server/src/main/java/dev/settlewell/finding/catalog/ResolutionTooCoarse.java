@@ -39,7 +39,8 @@ final class ResolutionTooCoarse extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, channel, "resolution")
             .message(
-                "one step of the reported value is %s, %s are asked for: %s times the gain, or %s more %s, would do"
+                ("one step of the reported value is %s, %s are asked for: %s times the"
+                        + " gain, or %s more %s, would do")
                     .formatted(
                         Words.of(step, unit),
                         Words.of(wanted, unit),

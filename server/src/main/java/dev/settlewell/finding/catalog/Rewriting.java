@@ -20,8 +20,7 @@ final class Rewriting {
 
   /** {@code 470 kΩ ±0.1 %} with {@code 47 kΩ} becomes {@code 47 kΩ ±0.1 %}. */
   static Optional<Edit> nominal(SourceText text, Slot<?> slot, String value) {
-    if (!(slot instanceof Slot.Stated<?> stated)
-        || !stated.place().sheet().equals(text.name())) {
+    if (!(slot instanceof Slot.Stated<?> stated) || !stated.place().sheet().equals(text.name())) {
       return Optional.empty();
     }
     String written = text.slice(stated.place().span());

@@ -56,8 +56,7 @@ final class ScanOverrunsPeriod implements Check {
     return scan.figures().value("scan-period").orElse(Double.NaN);
   }
 
-  private void check(
-      Analysis analysis, ScanFigures scan, Part part, Consumer<Finding> report) {
+  private void check(Analysis analysis, ScanFigures scan, Part part, Consumer<Finding> report) {
     if (!overruns(scan)) {
       return;
     }
@@ -66,9 +65,9 @@ final class ScanOverrunsPeriod implements Check {
     report.accept(
         FindingBuilder.of(this, part.slot("rate").place(), scan.scan().name())
             .message(
-                "the scan takes %s at the slowest clock, its period is %s; %s is the highest rate that fits"
-                    .formatted(
-                        Words.of(time, "s"), Words.of(period(scan), "s"), rate))
+                ("the scan takes %s at the slowest clock, its period is %s; %s is the"
+                        + " highest rate that fits")
+                    .formatted(Words.of(time, "s"), Words.of(period(scan), "s"), rate))
             .need("at most " + Words.of(period(scan), "s"))
             .have(Words.of(time, "s"))
             .margin(Words.of(period(scan) - time, "s"))

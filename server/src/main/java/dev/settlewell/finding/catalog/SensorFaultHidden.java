@@ -1,8 +1,8 @@
 package dev.settlewell.finding.catalog;
 
+import dev.settlewell.channel.Figure;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
-import dev.settlewell.channel.Figure;
 import dev.settlewell.sheet.Part;
 import dev.settlewell.text.Place;
 import java.util.Optional;
@@ -59,17 +59,19 @@ final class SensorFaultHidden extends ChannelCheck {
     String codes = Words.count(Math.floor(low)) + " to " + Words.count(Math.ceil(high));
     String message =
         inside
-            ? "%s reads as code %s, and what is measured gives codes %s: a fault cannot be told from a value; leave room beside the measured range, or let the node be pulled out of it"
+            ? ("%s reads as code %s, and what is measured gives codes %s: a fault cannot be"
+                    + " told from a value; leave room beside the measured range, or let the node"
+                    + " be pulled out of it")
                 .formatted(what, Words.count(value), codes)
-            : "%s leaves the pin without a defined code (%s); a resistor that pulls the node out of the measured range makes the fault visible"
+            : ("%s leaves the pin without a defined code (%s); a resistor that pulls the"
+                    + " node out of the measured range makes the fault visible")
                 .formatted(what, undetermined.get());
     FindingBuilder finding =
         FindingBuilder.of(this, place(channel), channel.name()).about(fault).message(message);
     if (!Double.isNaN(low)) {
       finding.need("outside codes " + codes);
     }
-    report.accept(
-        finding.have(inside ? "code " + Words.count(value) : "undetermined").build());
+    report.accept(finding.have(inside ? "code " + Words.count(value) : "undetermined").build());
   }
 
   /** The kind of the sensor: the key that says what may break. */

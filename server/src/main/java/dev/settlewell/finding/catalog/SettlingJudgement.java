@@ -71,8 +71,7 @@ final class SettlingJudgement {
   Severity severity() {
     double measured = channel.magnitude("settling-error-measured");
     boolean small =
-        channel.needs().isPresent()
-            && measured <= SHARE_OF_NEEDS * channel.needs().getAsDouble();
+        channel.needs().isPresent() && measured <= SHARE_OF_NEEDS * channel.needs().getAsDouble();
     return small ? Severity.WARNING : Severity.ERROR;
   }
 
@@ -135,8 +134,7 @@ final class SettlingJudgement {
       return Optional.empty();
     }
     double preferred = PreferredValues.nextLower(Series.E24, largest);
-    return Optional.of(
-        Words.of(largest, "Ω") + " (" + Words.part(preferred, "Ω") + " of E24)");
+    return Optional.of(Words.of(largest, "Ω") + " (" + Words.part(preferred, "Ω") + " of E24)");
   }
 
   /** The capacitor nearest the pin, which is the channel's reservoir. */

@@ -27,7 +27,10 @@ final class SkewTooLarge extends ChannelCheck {
   void check(ChannelView channel, Consumer<Finding> report) {
     Optional<Part> within = channel.part().part("within").stated();
     double allowed =
-        within.flatMap(part -> part.quantity("skew").stated()).map(q -> q.value()).orElse(Double.NaN);
+        within
+            .flatMap(part -> part.quantity("skew").stated())
+            .map(q -> q.value())
+            .orElse(Double.NaN);
     double skew = channel.magnitude("skew");
     if (!(skew > allowed)) {
       return;
@@ -36,9 +39,9 @@ final class SkewTooLarge extends ChannelCheck {
     report.accept(
         FindingBuilder.of(this, within.get().slot("skew").place(), channel.name())
             .message(
-                "%s lie between the samples of %s and %s, %s are allowed; put them side by side in the order, or shorten what lies between"
-                    .formatted(
-                        Words.of(skew, "s"), channel.name(), other, Words.of(allowed, "s")))
+                ("%s lie between the samples of %s and %s, %s are allowed; put them side by"
+                        + " side in the order, or shorten what lies between")
+                    .formatted(Words.of(skew, "s"), channel.name(), other, Words.of(allowed, "s")))
             .need("at most " + Words.of(allowed, "s"))
             .have(Words.of(skew, "s"))
             .margin(Words.of(allowed - skew, "s"))

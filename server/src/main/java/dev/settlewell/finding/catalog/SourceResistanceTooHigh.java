@@ -54,8 +54,7 @@ final class SourceResistanceTooHigh extends ChannelCheck {
         FindingBuilder.of(this, place(channel), channel.name())
             .message(
                 "the pin's leakage through %s makes an error of %s; at most %s keeps it within %s"
-                    .formatted(
-                        have, leaves, would, Words.of(allowed, channel.unit())))
+                    .formatted(have, leaves, would, Words.of(allowed, channel.unit())))
             .need("at most " + would)
             .have(have)
             .fact("error", leaves)

@@ -46,9 +46,7 @@ final class TypicalOnly implements Check {
       places(channel)
           .forEach(
               place ->
-                  restingOn
-                      .computeIfAbsent(place, p -> new LinkedHashSet<>())
-                      .add(channel.name()));
+                  restingOn.computeIfAbsent(place, p -> new LinkedHashSet<>()).add(channel.name()));
     }
     restingOn.forEach((place, channels) -> report.accept(finding(analysis, place, channels)));
   }
@@ -71,7 +69,8 @@ final class TypicalOnly implements Check {
             .orElse(channels.iterator().next());
     return FindingBuilder.of(this, place, subject)
         .message(
-            "only a typical figure is stated and it counts as exact, so the worst case of %s is not one; state `max` (or `min`) too"
+            ("only a typical figure is stated and it counts as exact, so the worst case of"
+                    + " %s is not one; state `max` (or `min`) too")
                 .formatted(String.join(", ", channels)))
         .build();
   }

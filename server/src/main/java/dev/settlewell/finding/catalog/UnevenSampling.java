@@ -37,7 +37,8 @@ final class UnevenSampling extends ChannelCheck {
     double band = channel.number("band");
     boolean fast = band > SLOW_BAND * rate;
     String message =
-        "the %d visits a scan are spaced up to %s off their mean%s; spread them evenly over the period, or sample the channel in a scan of its own"
+        ("the %d visits a scan are spaced up to %s off their mean%s; spread them evenly"
+                + " over the period, or sample the channel in a scan of its own")
             .formatted(
                 channel.figures().visits(),
                 Words.share(off),

@@ -83,9 +83,7 @@ final class UnknownName extends TextCheck {
     FindingBuilder finding =
         FindingBuilder.of(this, place, "").message("there is no finding `" + written + "`" + hint);
     nearest.ifPresent(
-        name ->
-            finding.fix(
-                new Fix("Write " + name, List.of(new Edit(place, name)), false)));
+        name -> finding.fix(new Fix("Write " + name, List.of(new Edit(place, name)), false)));
     report.accept(finding.build());
   }
 }

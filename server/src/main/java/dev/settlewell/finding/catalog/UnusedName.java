@@ -55,10 +55,7 @@ final class UnusedName implements Check {
   }
 
   private void report(
-      Collection<? extends Named<?>> all,
-      String what,
-      Set<String> used,
-      Consumer<Finding> report) {
+      Collection<? extends Named<?>> all, String what, Set<String> used, Consumer<Finding> report) {
     for (Named<?> named : all) {
       if (!used.contains(named.name())) {
         report.accept(

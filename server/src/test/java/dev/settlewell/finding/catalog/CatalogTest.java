@@ -30,8 +30,9 @@ class CatalogTest {
   void everyCheckOfThePackageIsListedOnce() {
     Set<String> classes =
         new ClassFileImporter()
-            .withImportOption(ImportOption.Predefined.DO_NOT_INCLUDE_TESTS)
-            .importPackages("dev.settlewell.finding.catalog").stream()
+                .withImportOption(ImportOption.Predefined.DO_NOT_INCLUDE_TESTS)
+                .importPackages("dev.settlewell.finding.catalog")
+                .stream()
                 .filter(c -> c.isAssignableTo(Check.class))
                 .filter(c -> !c.getModifiers().toString().contains("ABSTRACT"))
                 .map(JavaClass::getSimpleName)
@@ -44,7 +45,11 @@ class CatalogTest {
   @Test
   void everyCheckSaysWhatItIsInOneLine() {
     for (Check check : Catalog.CHECKS) {
-      assertThat(check.summary()).as(check.name()).isNotBlank().doesNotContain("\n").doesNotEndWith(".");
+      assertThat(check.summary())
+          .as(check.name())
+          .isNotBlank()
+          .doesNotContain("\n")
+          .doesNotEndWith(".");
       assertThat(check.severity()).as(check.name()).isNotEqualTo(Severity.OFF);
     }
   }
