@@ -193,7 +193,9 @@ final class BlockScan {
         noDash(row, level);
       }
     } else if (!level.list && item) {
-      if (level.last == Level.Last.OPEN) {
+      if (!started && dashIsStray(row)) {
+        strayDash(row, level);
+      } else if (level.last == Level.Last.OPEN) {
         level.last = Level.Last.CLOSED;
         Level list = new Level(true, row.indent(), drafted, mend);
         levels.push(list);
@@ -212,13 +214,33 @@ final class BlockScan {
 
   private void strayDash(Row row, Level level) {
     int at = row.content();
+    int key = mending.skipBlanks(at + 1);
     mending.syntax(
         at,
         at + 1,
         "a dash does not belong before a key here: remove it",
-        mending.guess("Remove the dash", mending.edit(at, at + 1, "")));
-    mending.draft.drop(at, at + 1);
-    entry(row, level, at + 1);
+        mending.guess("Remove the dash", mending.edit(at, key, "")));
+    mending.draft.drop(at, key);
+    entry(row, level, key);
+  }
+
+  /** True where keys stand beside a dash, and no other dash: it is one too many. */
+  private boolean dashIsStray(Row row) {
+    int keys = 0;
+    int next = row.number();
+    while ((next = mending.nextContent(next)) >= 0 && mending.row(next).indent() >= row.indent()) {
+      Row below = mending.row(next);
+      if (below.indent() == row.indent()) {
+        if (shapes.isItem(below.content())) {
+          return false;
+        }
+        keys += shapes.isText(below) ? 0 : 1;
+      }
+      if (keys == 2) {
+        return shapes.hasKey(mending.skipBlanks(row.content() + 1), row.end());
+      }
+    }
+    return false;
   }
 
   private Level below(Level level) {
@@ -240,9 +262,12 @@ final class BlockScan {
       return;
     }
     parent.last = Level.Last.CLOSED;
-    Level level = new Level(item, row.indent(), row.indent(), null);
+    boolean stray = item && dashIsStray(row);
+    Level level = new Level(item && !stray, row.indent(), row.indent(), null);
     levels.push(level);
-    if (item) {
+    if (stray) {
+      strayDash(row, level);
+    } else if (item) {
       item(row, level, at, row.indent(), null);
     } else {
       entry(row, level);
@@ -282,6 +307,7 @@ final class BlockScan {
         return;
       }
       int column = content - row.content();
+      content = behindStrayMark(content, row.end());
       boolean nested = shapes.isItem(content);
       boolean number = Character.isDigit(mending.draft.at(content)); // `- 1:30` is no key
       boolean key =
@@ -303,6 +329,21 @@ final class BlockScan {
       level = inner;
       at = content;
     }
+  }
+
+  /** {@code - ]resistor: …}: the mark is left out. */
+  private int behindStrayMark(int at, int end) {
+    if ("]}@%`,|>".indexOf(mending.draft.at(at)) < 0 || !shapes.wordKey(at + 1, end)) {
+      return at;
+    }
+    String written = mending.slice(at, at + 1);
+    mending.syntax(
+        at,
+        at + 1,
+        "`" + written + "` does not belong before a key: remove it",
+        mending.guess("Remove `" + written + "`", mending.edit(at, at + 1, "")));
+    mending.draft.drop(at, at + 1);
+    return at + 1;
   }
 
   private void entry(Row row, Level level) {

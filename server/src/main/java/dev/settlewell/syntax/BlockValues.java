@@ -159,6 +159,7 @@ final class BlockValues {
       char digit = mending.draft.at(i);
       indent = digit >= '1' && digit <= '9' ? level.indent + digit - '0' : indent;
     }
+    int header = mending.text.line(mending.line).end();
     int last = mending.line;
     for (int next = mending.line + 1; next < mending.text.lineCount(); next++) {
       Row row = mending.row(next);
@@ -171,7 +172,7 @@ final class BlockValues {
       }
     }
     mending.line = last;
-    mending.verbatim.add(new Span(at, mending.row(last).end()));
+    mending.verbatim.add(new Span(header, Math.max(header, mending.row(last).end())));
   }
 
   /** The value of a key that holds prose: what YAML would not read to its end is read in quotes. */

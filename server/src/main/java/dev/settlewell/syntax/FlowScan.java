@@ -263,6 +263,7 @@ final class FlowScan {
     int end = plainEnd(at);
     int colon = top.bracket == '{' && !top.keySeen ? mending.tightColon(at, end) : -1;
     if (colon < 0) {
+      questionMark(at, end);
       remember(top, at, end);
       advance(Math.max(end, at + 1));
       return;
@@ -273,6 +274,13 @@ final class FlowScan {
     top.fresh = true;
     top.valueStart = colon + 1;
     advance(colon + 1);
+  }
+
+  /** YAML 1.2 has question marks inside a plain text; the parser, which is of 1.1, has not. */
+  private void questionMark(int start, int end) {
+    if (mending.slice(start, end).indexOf('?') >= 0) {
+      mending.quote(start, end);
+    }
   }
 
   private void remember(Open top, int start, int end) {
@@ -303,6 +311,8 @@ final class FlowScan {
           end,
           "YAML does not read this text to its end: put it in quotes",
           mending.quote(start, end));
+    } else {
+      questionMark(start, end);
     }
     advance(Math.max(end, start + 1));
   }

@@ -103,7 +103,7 @@ final class Shapes {
         && !(quote && quotes.closed(at, row.number(), base) >= 0);
   }
 
-  private boolean wordKey(int at, int end) {
+  boolean wordKey(int at, int end) {
     int colon = colon(at, end);
     return colon > at && word(at, colon);
   }

@@ -76,6 +76,23 @@ class SyntaxSlipsTest {
         slip("a: ⟦]⟧~  b: 1~d: 3", "{a: {b: 1}, d: 3}", "does not belong", "a: ~  b: 1~d: 3"),
         slip("a: ⟦[⟧~  b: 1~d: 3", "{a: {b: 1}, d: 3}", "does not belong", "a: ~  b: 1~d: 3"),
         slip("a: 1~⟦-⟧b: 1~d: 3", "{a: 1, b: 1, d: 3}", "dash", "a: 1~b: 1~d: 3"),
+        slip("⟦-⟧ a: 1~b: 1~d: 3", "{a: 1, b: 1, d: 3}", "dash", "a: 1~b: 1~d: 3"),
+        slip(
+            "x:~  ⟦-⟧ a: 1~  b: 1~  d: 3",
+            "{x: {a: 1, b: 1, d: 3}}",
+            "dash",
+            "x:~  a: 1~  b: 1~  d: 3"),
+        slip(
+            "p:~  - ⟦]⟧a:~      b: 1~  - d: 3",
+            "{p: [{a: {b: 1}}, {d: 3}]}",
+            "before a key",
+            "p:~  - a:~      b: 1~  - d: 3"),
+        slip(
+            "a:~  b: 1~    ⟦o⟧:~  - x~  gap: 1",
+            "{a: {b: 1, o: [x], gap: 1}}",
+            "indented",
+            "a:~  b: 1~  o:~  - x~  gap: 1"),
+        slip("about: >-\t~  x~b: 1", "{about: x, b: 1}", null, null),
         // Indentation.
         slip(
             "a:~  b: 1~    ⟦c⟧: 2~  d: 3",
@@ -183,6 +200,11 @@ class SyntaxSlipsTest {
             "a: 1~b: 2~c: 4"),
         slip("a: 1~⟦=======⟧~c: 4", "{a: 1, c: 4}", "conflict", null),
         // No slip at all.
+        slip(
+            "a: {because: why? x, b: [?x, c?d]}",
+            "{a: {because: why? x, b: [?x, c?d]}}",
+            null,
+            null),
         slip("", "{}", null, null),
         slip("# only~~# comments", "{}", null, null),
         slip("---~a: 1~...", "{a: 1}", null, null),
