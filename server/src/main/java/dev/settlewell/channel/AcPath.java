@@ -18,8 +18,7 @@ record AcPath(double ohms, List<Element> chain, Sampler sampler) {
    * @param p parameters
    * @param pinFarads capacitance of the pin
    */
-  static AcPath of(
-      ChannelModel model, double x, double[] p, double pinFarads, Sampler sampler) {
+  static AcPath of(ChannelModel model, double x, double[] p, double pinFarads, Sampler sampler) {
     ForwardModel forward = model.forward();
     Port source = forward.sensor().port(x, p);
     List<Element> chain = new ArrayList<>();

@@ -8,8 +8,6 @@ import dev.settlewell.circuit.LowPass;
 import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Slot;
 import dev.settlewell.text.Place;
-import dev.settlewell.unit.Deviation;
-import dev.settlewell.unit.Dimension;
 import dev.settlewell.unit.Range;
 import dev.settlewell.unit.Toleranced;
 import java.util.List;
@@ -71,8 +69,7 @@ record ActiveStage(
     Slot.Stated<Double> order = bench.inputs.need(stage.number("order"));
     Slot.Stated<Toleranced> corner = bench.inputs.need(stage.quantity("corner"));
     boolean ripples = response != null && response.value().equals("chebyshev");
-    Slot.Stated<Toleranced> ripple =
-        ripples ? bench.inputs.need(stage.quantity("ripple")) : null;
+    Slot.Stated<Toleranced> ripple = ripples ? bench.inputs.need(stage.quantity("ripple")) : null;
     if (response == null || order == null || corner == null || ripples && ripple == null) {
       return null;
     }

@@ -251,7 +251,8 @@ public final class Analyzer {
           .ifPresent(
               needs ->
                   figures.add(
-                      Figure.of("needs", needs, model.unit(), "what the sheet asks for, at the top")));
+                      Figure.of(
+                          "needs", needs, model.unit(), "what the sheet asks for, at the top")));
       if (!model.complete()) {
         figures.add(model.inputs().figure("lsb", "V"));
         return figures(List.of(), Optional.empty(), List.of());

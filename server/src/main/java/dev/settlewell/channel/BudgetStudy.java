@@ -46,7 +46,9 @@ final class BudgetStudy {
     calibration();
   }
 
-  /** {@code calibrated: [offset, gain]}: those rows of the converter were removed in the factory. */
+  /**
+   * {@code calibrated: [offset, gain]}: those rows of the converter were removed in the factory.
+   */
   private void calibration() {
     Part calibrated = model.part().part("calibrated").stated().orElse(null);
     if (calibrated == null) {
@@ -208,9 +210,7 @@ final class BudgetStudy {
     }
     double offset = spread.oneSided() ? (up + down) / 2 : 0;
     double limit =
-        spread.oneSided()
-            ? Math.abs(up - down) / 2
-            : Math.max(Math.abs(up), Math.abs(down));
+        spread.oneSided() ? Math.abs(up - down) / 2 : Math.max(Math.abs(up), Math.abs(down));
     return new Contribution(
         spread.row(),
         offset,
@@ -265,17 +265,18 @@ final class BudgetStudy {
       return;
     }
     List<Place> places = List.of(model.part().either("acquisition").place());
-    rows.add(
-        Contribution.of("settling", new Distribution.Rectangular(half), false, places));
+    rows.add(Contribution.of("settling", new Distribution.Rectangular(half), false, places));
     double middle = (high + low) / 2;
     if (Math.abs(middle) > 1e-9 * half) {
       rows.add(
-          new Contribution(
-              "settling-offset", middle, 0, List.of(), true, false, false, places));
+          new Contribution("settling-offset", middle, 0, List.of(), true, false, false, places));
     }
   }
 
-  /** A sensor warmed by its own current reads high: by nothing in a strong flow, by P/δ in still air. */
+  /**
+   * A sensor warmed by its own current reads high: by nothing in a strong flow, by P/δ in still
+   * air.
+   */
   private void selfHeating(double x, List<Contribution> rows) {
     double rise = model.forward().selfHeating(x);
     if (rise > 0) {

@@ -24,8 +24,7 @@ record Contribution(
   static Contribution of(String name, Distribution part, boolean scalesWithLsb, List<Place> at) {
     boolean bounded = Double.isFinite(part.limit());
     double limit = bounded ? part.limit() : 3 * part.standard();
-    return new Contribution(
-        name, 0, limit, List.of(part), bounded, scalesWithLsb, false, at);
+    return new Contribution(name, 0, limit, List.of(part), bounded, scalesWithLsb, false, at);
   }
 
   /**

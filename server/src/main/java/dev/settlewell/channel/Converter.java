@@ -77,7 +77,11 @@ record Converter(
       bench.error(
           "offset", offset, part.deviation("offset-error"), unit -> inLsb(unit, codes, lsb), true);
       bench.error(
-          "gain", gain, part.deviation("gain-error"), unit -> inLsb(unit, codes, lsb) / codes, true);
+          "gain",
+          gain,
+          part.deviation("gain-error"),
+          unit -> inLsb(unit, codes, lsb) / codes,
+          true);
       bench.error(
           "nonlinearity",
           linearity,
@@ -161,5 +165,4 @@ record Converter(
   double volts(double code, double[] nominal) {
     return spanLow(nominal) + code * lsb(nominal);
   }
-
 }

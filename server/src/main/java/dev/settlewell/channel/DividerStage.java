@@ -35,7 +35,10 @@ record DividerStage(int upper, int lower, int ratio) implements StageModel.Passi
 
   private static int nominal(Slot<Toleranced> slot, Bench bench) {
     Slot.Stated<Toleranced> stated = bench.inputs.need(slot);
-    return stated == null ? -1 : bench.parameters.add("divider", Toleranced.exact(stated.value().nominal()), List.of(stated.place()));
+    return stated == null
+        ? -1
+        : bench.parameters.add(
+            "divider", Toleranced.exact(stated.value().nominal()), List.of(stated.place()));
   }
 
   @Override

@@ -56,8 +56,15 @@ public record Figure(
   /** A missing input: JSON Pointer, and the key it would stand under. */
   public record Input(String pointer, Place parent) {}
 
-  /** A value that entered a figure, and where it stands in a sheet (computed ones stand nowhere). */
-  public record Operand(String name, double value, String unit, Optional<Place> place) {}
+  /**
+   * A value that entered a figure, and where it stands in a sheet (computed ones stand nowhere).
+   */
+  public record Operand(String name, double value, String unit, Optional<Place> place) {
+    /** A computed one. */
+    public static Operand of(String name, double value, String unit) {
+      return new Operand(name, value, unit, Optional.empty());
+    }
+  }
 
   public Figure {
     operands = List.copyOf(operands);
@@ -70,13 +77,11 @@ public record Figure(
   }
 
   public static Figure none(String name, String unit, String why) {
-    return new Figure(
-        name, new State.None(why), unit, OptionalDouble.empty(), "", List.of());
+    return new Figure(name, new State.None(why), unit, OptionalDouble.empty(), "", List.of());
   }
 
   public static Figure unlimited(String name, String unit) {
-    return new Figure(
-        name, new State.Unlimited(), unit, OptionalDouble.empty(), "", List.of());
+    return new Figure(name, new State.Unlimited(), unit, OptionalDouble.empty(), "", List.of());
   }
 
   public static Figure missing(String name, String unit, List<Input> inputs) {

@@ -40,8 +40,7 @@ final class FirmwareStudy {
     double shift = adc.firstTransition() - 0.5;
     // The line through the ends of the range, carried on to code 0 and to full scale.
     double from = forward.volts(model.measures().low(), p);
-    double perVolt =
-        model.measures().width() / (forward.volts(model.measures().high(), p) - from);
+    double perVolt = model.measures().width() / (forward.volts(model.measures().high(), p) - from);
     double low = model.measures().low() + (adc.volts(shift, p) - from) * perVolt;
     double high = low + adc.codes() * adc.lsb(p) * perVolt;
     double scale = (high - low) / adc.codes();
@@ -51,8 +50,8 @@ final class FirmwareStudy {
             scale,
             model.unit(),
             "(value of code 2^bits - value of code 0) / 2^bits",
-            operand("value of code 2^bits", high, model.unit()),
-            operand("value of code 0", low, model.unit())));
+            Figure.Operand.of("value of code 2^bits", high, model.unit()),
+            Figure.Operand.of("value of code 0", low, model.unit())));
     figures.add(Figure.of("offset", low, model.unit(), "value of code 0"));
     fixedPoint(model, scale, figures);
   }
@@ -82,8 +81,8 @@ final class FirmwareStudy {
             signed,
             "1",
             "scale / unit x 2^scale-shift, rounded",
-            operand("scale", scale, model.unit()),
-            operand("unit", unit, model.unit())));
+            Figure.Operand.of("scale", scale, model.unit()),
+            Figure.Operand.of("unit", unit, model.unit())));
     figures.add(
         Figure.of("scale-shift", shift, "1", "largest with a multiplier within 16 bits, signed"));
     figures.add(
@@ -103,8 +102,8 @@ final class FirmwareStudy {
             bits,
             "1",
             "bits that hold average x (2^bits - 1)",
-            operand("average", model.average(), "1"),
-            operand("largest sum", sum, "1")));
+            Figure.Operand.of("average", model.average(), "1"),
+            Figure.Operand.of("largest sum", sum, "1")));
   }
 
   /** A mean of M codes steps by 1/M LSB only where noise carries it over the codes' edges. */
@@ -118,8 +117,7 @@ final class FirmwareStudy {
         at = x;
       }
     }
-    figures.add(
-        Figure.of("resolution-step", worst, model.unit(), "lsb-measured, one code").at(at));
+    figures.add(Figure.of("resolution-step", worst, model.unit(), "lsb-measured, one code").at(at));
   }
 
   private static void limits(ChannelModel model, Budget budget, List<Figure> figures) {
@@ -141,9 +139,5 @@ final class FirmwareStudy {
   /** The hard limit in volts at the pin. */
   private static double widest(ChannelModel model, Budget budget) {
     return budget.hardLimit() * Math.abs(model.slope(budget.at()));
-  }
-
-  private static Figure.Operand operand(String name, double value, String unit) {
-    return new Figure.Operand(name, value, unit, Optional.empty());
   }
 }

@@ -12,7 +12,6 @@ import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.OptionalDouble;
 
 /** The response of a channel's path, where interferers land, and what the wanted band loses. */
@@ -37,8 +36,7 @@ final class FrequencyStudy {
     this.pinFarads = nominal(adc, "pin-capacitance", 0);
     // An unknown sampler loads nothing: a tiny one, which no frequency of interest feels.
     this.sampler =
-        new Sampler(
-            nominal(adc, "switch-resistance", 0), nominal(adc, "hold-capacitor", 1e-18));
+        new Sampler(nominal(adc, "switch-resistance", 0), nominal(adc, "hold-capacitor", 1e-18));
   }
 
   private static double nominal(Part part, String key, double otherwise) {
@@ -90,8 +88,7 @@ final class FrequencyStudy {
   }
 
   private void response(AcPath path) {
-    OptionalDouble corner =
-        FrequencyResponse.corner(path.ohms(), path.chain(), path.sampler());
+    OptionalDouble corner = FrequencyResponse.corner(path.ohms(), path.chain(), path.sampler());
     String formula = "|H(f)| = |H(0)| / sqrt 2, whole path to the hold capacitor";
     if (corner.isEmpty()) {
       figures.add(Figure.unlimited("corner-frequency", "Hz"));
@@ -99,11 +96,9 @@ final class FrequencyStudy {
       return;
     }
     figures.add(Figure.of("corner-frequency", corner.getAsDouble(), "Hz", formula));
-    double bandwidth =
-        FrequencyResponse.noiseBandwidth(path.ohms(), path.chain(), path.sampler());
+    double bandwidth = FrequencyResponse.noiseBandwidth(path.ohms(), path.chain(), path.sampler());
     if (Double.isFinite(bandwidth)) {
-      figures.add(
-          Figure.of("noise-bandwidth", bandwidth, "Hz", "integral of |H(f)|^2 / |H(0)|^2"));
+      figures.add(Figure.of("noise-bandwidth", bandwidth, "Hz", "integral of |H(f)|^2 / |H(0)|^2"));
     }
   }
 
@@ -122,9 +117,9 @@ final class FrequencyStudy {
             rate,
             "Hz",
             "visits per second / average",
-            operand("visits", timing.visits(model.name()), "1"),
-            operand("period", timing.nominalPeriod(), "s"),
-            operand("average", model.average(), "1")));
+            Figure.Operand.of("visits", timing.visits(model.name()), "1"),
+            Figure.Operand.of("period", timing.nominalPeriod(), "s"),
+            Figure.Operand.of("average", model.average(), "1")));
     figures.add(
         Figure.of("result-rate-least", resultRate(timing.longestPeriod()), "Hz", "at the least"));
   }
@@ -167,9 +162,9 @@ final class FrequencyStudy {
             droop,
             "1",
             "1 - |H(band)| / |H(0)| x averaging response, components at their high ends",
-            operand("band", hertz, "Hz"),
-            operand("path", least, "1"),
-            operand("averaging", averaging, "1")));
+            Figure.Operand.of("band", hertz, "Hz"),
+            Figure.Operand.of("path", least, "1"),
+            Figure.Operand.of("averaging", averaging, "1")));
   }
 
   /** Resistors and capacitors of the path at their high ends: the lowest corner. */
@@ -206,9 +201,7 @@ final class FrequencyStudy {
       double path = pathGain(x, f);
       gain = Math.max(gain, path * averaging);
       volts = Math.max(volts, line.amplitude() * path * averaging);
-      measured =
-          Math.max(
-              measured, line.amplitude() * path * averaging / Math.abs(model.slope(x)));
+      measured = Math.max(measured, line.amplitude() * path * averaging / Math.abs(model.slope(x)));
     }
     double rate = resultRate(timing.nominalPeriod());
     OptionalDouble edge = bandEdge();
@@ -289,7 +282,8 @@ final class FrequencyStudy {
           .add(new Lines.Landed(where, amplitude));
       first.putIfAbsent(line.interferer(), line);
     }
-    double same = timing == null || aliases.isEmpty() ? 0 : resultRate(timing.nominalPeriod()) * 1e-6;
+    double same =
+        timing == null || aliases.isEmpty() ? 0 : resultRate(timing.nominalPeriod()) * 1e-6;
     List<Contribution> rows = new ArrayList<>();
     landed.forEach(
         (name, list) ->
@@ -315,9 +309,4 @@ final class FrequencyStudy {
     }
     return Math.sqrt(squares);
   }
-
-  private static Figure.Operand operand(String name, double value, String unit) {
-    return new Figure.Operand(name, value, unit, Optional.empty());
-  }
-
 }

@@ -21,8 +21,7 @@ record Line(String interferer, int harmonic, Limits frequency, double amplitude,
   /** The lines a channel names; those that cannot be read are left out, they have findings. */
   static List<Line> of(Part channel, Linked linked) {
     List<Line> lines = new ArrayList<>();
-    List<Slot<Part>> couplings =
-        channel.list("interferers", Part.class).orElse(List.of());
+    List<Slot<Part>> couplings = channel.list("interferers", Part.class).orElse(List.of());
     for (Slot<Part> coupling : couplings) {
       if (!(coupling instanceof Slot.Stated<Part> stated)) {
         continue;

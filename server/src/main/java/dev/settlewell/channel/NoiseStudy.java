@@ -50,8 +50,8 @@ final class NoiseStudy {
               thermal,
               "V",
               "sqrt(k T / C_hold)",
-              operand("T", kelvin, "K"),
-              operand("C_hold", Limits.low(hold.get()), "F")));
+              Figure.Operand.of("T", kelvin, "K"),
+              Figure.Operand.of("C_hold", Limits.low(hold.get()), "F")));
     }
     double network = network(kelvin, thermal);
     double converter = converterNoise(adc);
@@ -59,16 +59,15 @@ final class NoiseStudy {
     double jitter = frequency.jitterNoise(model.measures().high());
     // A converter's stated noise holds that of its own hold capacitor.
     double own = Double.isNaN(converter) ? thermal : converter;
-    double white = 
-        Math.sqrt(
-            own * own + network * network + amplifiers * amplifiers + jitter * jitter);
+    double white =
+        Math.sqrt(own * own + network * network + amplifiers * amplifiers + jitter * jitter);
     sigma = white / model.lsb();
     report(white);
   }
 
   /**
-   * Thermal noise of the resistors before an amplifier, beyond that of the hold capacitor, V rms. Of
-   * a passive path nothing is left: k T / C_hold is all of it.
+   * Thermal noise of the resistors before an amplifier, beyond that of the hold capacitor, V rms.
+   * Of a passive path nothing is left: k T / C_hold is all of it.
    */
   private double network(double kelvin, double hold) {
     if (model.lastActive().isEmpty()) {
@@ -91,15 +90,16 @@ final class NoiseStudy {
             "noise",
             total,
             "V",
-            "root of the sum of squares: converter or hold capacitor, amplifiers, flicker, jitter"));
+            "root of the sum of squares: converter or hold capacitor, amplifiers, flicker,"
+                + " jitter"));
     figures.add(
         Figure.of(
             "noise-lsb",
             total / model.lsb(),
             "LSB",
             "noise / lsb",
-            operand("noise", total, "V"),
-            operand("lsb", model.lsb(), "V")));
+            Figure.Operand.of("noise", total, "V"),
+            Figure.Operand.of("lsb", model.lsb(), "V")));
     double worst = 0;
     double at = model.measures().high();
     for (double x : model.points()) {
@@ -115,20 +115,23 @@ final class NoiseStudy {
                 worst,
                 model.unit(),
                 "noise / sqrt(average) / slope of the pin's voltage; flicker is not averaged",
-                operand("average", count, "1"))
+                Figure.Operand.of("average", count, "1"))
             .at(at));
     double rest = Math.sqrt((sigma * sigma + 1.0 / 12) / count);
     figures.add(
         Figure.of(
-            "averaging-rest", rest, "LSB", "sqrt((sigma^2 + 1/12) / average)",
-            operand("sigma", sigma, "LSB")));
+            "averaging-rest",
+            rest,
+            "LSB",
+            "sqrt((sigma^2 + 1/12) / average)",
+            Figure.Operand.of("sigma", sigma, "LSB")));
     figures.add(
         Figure.of(
             "averaging-bias",
             Noise.quantizerBias(sigma),
             "LSB",
             "largest bias of the mean of a quantized value with noise sigma",
-            operand("sigma", sigma, "LSB")));
+            Figure.Operand.of("sigma", sigma, "LSB")));
     double afterQuantizing =
         Math.sqrt(
             Noise.averagedQuantization(sigma, count) * Noise.averagedQuantization(sigma, count)
@@ -139,7 +142,7 @@ final class NoiseStudy {
             Noise.effectiveBits(model.converterCodes(), afterQuantizing),
             "1",
             "log2(span / (sqrt 12 x rms of noise and quantization after averaging))",
-            operand("rms", afterQuantizing, "LSB")));
+            Figure.Operand.of("rms", afterQuantizing, "LSB")));
   }
 
   /** V rms; NaN where it is not stated. */
@@ -273,9 +276,4 @@ final class NoiseStudy {
                         List.of(amplitude.place()))))
         .orElse(List.of());
   }
-
-  private static Figure.Operand operand(String name, double value, String unit) {
-    return new Figure.Operand(name, value, unit, Optional.empty());
-  }
-
 }

@@ -120,10 +120,7 @@ final class Parameters {
         .drift()
         .ifPresent(
             drift -> {
-              double scale =
-                  drift.unit().dimension() == Dimension.RATIO
-                      ? Math.abs(nominal)
-                      : 1;
+              double scale = drift.unit().dimension() == Dimension.RATIO ? Math.abs(nominal) : 1;
               add(Spread.of(row + "-drift", index, drift(drift, scale), Optional.empty(), places));
             });
   }

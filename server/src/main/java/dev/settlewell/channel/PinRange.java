@@ -1,6 +1,8 @@
 package dev.settlewell.channel;
 
-/** What a channel's pin does over its measured range, V: nominal, and with every error at its end. */
+/**
+ * What a channel's pin does over its measured range, V: nominal, and with every error at its end.
+ */
 record PinRange(double nominalLow, double nominalHigh, double worstLow, double worstHigh) {
 
   static PinRange of(ChannelModel model) {

@@ -4,8 +4,8 @@ package dev.settlewell.channel;
  * A linear source seen at one node, as {@code volts = v/d} behind {@code ohms = r/d}.
  *
  * <p>The common divisor lets one type hold an ideal voltage source ({@code r = 0}) and an ideal
- * current source ({@code d = 0}) without infinities on the way: a current source becomes ordinary as
- * soon as something hangs at its node.
+ * current source ({@code d = 0}) without infinities on the way: a current source becomes ordinary
+ * as soon as something hangs at its node.
  */
 record Port(double v, double r, double d) {
 

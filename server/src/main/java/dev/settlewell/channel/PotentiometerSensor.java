@@ -25,8 +25,7 @@ record PotentiometerSensor(Range spans, int resistance, int across, int accuracy
     double fraction = (x + p[accuracy] - spans.low()) / spans.width();
     // Beyond an end stop there is no wiper; errors ask a little beyond, and see its end.
     double travel = Math.max(0, Math.min(1, fraction));
-    return Port.voltage(
-        fraction * p[across], Potentiometer.wiperResistance(p[resistance], travel));
+    return Port.voltage(fraction * p[across], Potentiometer.wiperResistance(p[resistance], travel));
   }
 
   @Override

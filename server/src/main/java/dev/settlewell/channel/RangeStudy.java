@@ -53,12 +53,9 @@ final class RangeStudy {
     double x = model.measures().high();
     for (double ambient : model.ambients()) {
       leastHigh =
-          Math.min(
-              leastHigh,
-              Corner.extreme(model.spreads(), p, x, ambient, false, adc::spanHigh));
+          Math.min(leastHigh, Corner.extreme(model.spreads(), p, x, ambient, false, adc::spanHigh));
       mostLow =
-          Math.max(
-              mostLow, Corner.extreme(model.spreads(), p, x, ambient, true, adc::spanLow));
+          Math.max(mostLow, Corner.extreme(model.spreads(), p, x, ambient, true, adc::spanLow));
     }
     figures.add(Figure.of("span-least-low", mostLow, "V", "code 0 at its highest"));
     figures.add(Figure.of("span-least-high", leastHigh, "V", "reference at its least"));
@@ -83,9 +80,9 @@ final class RangeStudy {
             (pin.nominalHigh() - pin.nominalLow()) / span,
             "1",
             "(pin-nominal-high - pin-nominal-low) / span",
-            operand("pin-nominal-high", pin.nominalHigh(), "V"),
-            operand("pin-nominal-low", pin.nominalLow(), "V"),
-            operand("span", span, "V")));
+            Figure.Operand.of("pin-nominal-high", pin.nominalHigh(), "V"),
+            Figure.Operand.of("pin-nominal-low", pin.nominalLow(), "V"),
+            Figure.Operand.of("span", span, "V")));
   }
 
   /** The share of the span the pin reaches: a ratiometric sensor's moves with its reference. */
@@ -203,8 +200,11 @@ final class RangeStudy {
     } else {
       figures.add(
           Figure.of(
-              name, model.forward().converter().read(volts, p), "1", formula,
-              operand("pin", volts, "V")));
+              name,
+              model.forward().converter().read(volts, p),
+              "1",
+              formula,
+              Figure.Operand.of("pin", volts, "V")));
     }
   }
 
@@ -215,8 +215,7 @@ final class RangeStudy {
       return;
     }
     Part adc = model.converterPart();
-    double clamp =
-        adc.quantity("clamp-voltage").stated().map(Limits::low).orElse(USUAL_CLAMP);
+    double clamp = adc.quantity("clamp-voltage").stated().map(Limits::low).orElse(USUAL_CLAMP);
     Optional<Toleranced> supply =
         adc.text("supply")
             .stated()
@@ -234,7 +233,10 @@ final class RangeStudy {
     overloadFigure("overload-current-high", high, rail + clamp, stated.place());
     overloadFigure("overload-current-low", low, -clamp, stated.place());
     overloadFigure(
-        "overload-current", Math.max(high, low), high >= low ? rail + clamp : -clamp, stated.place());
+        "overload-current",
+        Math.max(high, low),
+        high >= low ? rail + clamp : -clamp,
+        stated.place());
   }
 
   private void overloadFigure(String name, double amperes, double level, Place place) {
@@ -281,9 +283,5 @@ final class RangeStudy {
       figures.add(Figure.of("curve-low", sensor.low(), model.unit(), "low end of the curve"));
       figures.add(Figure.of("curve-high", sensor.high(), model.unit(), "high end of the curve"));
     }
-  }
-
-  private static Figure.Operand operand(String name, double value, String unit) {
-    return new Figure.Operand(name, value, unit, Optional.empty());
   }
 }

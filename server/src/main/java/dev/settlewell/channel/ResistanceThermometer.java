@@ -32,8 +32,7 @@ record ResistanceThermometer(
   static SensorModel bind(Part sensor, Bench bench) {
     int r0 = bench.optional("rtd-r0", sensor.quantity("r0"), 100);
     int wires = sensor.number("wires").orElse(2.0).intValue();
-    int leads =
-        wires == 2 ? leads(sensor, bench) : bench.parameters.add(0);
+    int leads = wires == 2 ? leads(sensor, bench) : bench.parameters.add(0);
     int mismatch = wires == 3 ? mismatch(sensor, bench) : bench.parameters.add(0);
     Slot.Stated<Toleranced> current = bench.inputs.optional(sensor.quantity("excitation"));
     int excitation = current == null ? -1 : bench.parameters.add("excitation", current);
@@ -120,11 +119,12 @@ record ResistanceThermometer(
     return ratio.high();
   }
 
-  /** Opened, its current source drives the node as far as it can: the code is that of a high node. */
+  /**
+   * Opened, its current source drives the node as far as it can: the code is that of a high node.
+   */
   @Override
   public Optional<Port> open(double[] p) {
-    return Optional.of(
-        excitation < 0 ? Port.current(0, 0) : Port.current(p[excitation], 0));
+    return Optional.of(excitation < 0 ? Port.current(0, 0) : Port.current(p[excitation], 0));
   }
 
   @Override

@@ -125,7 +125,10 @@ record ScanTiming(
     if (list == null) {
       return new double[0];
     }
-    return list.value().stream().mapToDouble(s -> s.orElse(Double.NaN)).filter(v -> v > 0).toArray();
+    return list.value().stream()
+        .mapToDouble(s -> s.orElse(Double.NaN))
+        .filter(v -> v > 0)
+        .toArray();
   }
 
   private static double seconds(Part part, String key, Inputs inputs) {
@@ -217,7 +220,9 @@ record ScanTiming(
     return fixed(name, hertz);
   }
 
-  /** The longest acquisition one channel could have in the shortest period, at the slowest clock. */
+  /**
+   * The longest acquisition one channel could have in the shortest period, at the slowest clock.
+   */
   double available(String name) {
     if (rate == null) {
       return Double.POSITIVE_INFINITY;

@@ -47,13 +47,14 @@ final class SettlingCircuit {
   private final double[] high;
   private final boolean[] corner;
 
-  /** Circuits by their point: both clocks, the need and the neighbour's fault ask about the same. */
+  /**
+   * Circuits by their point: both clocks, the need and the neighbour's fault ask about the same.
+   */
   private final Map<List<Double>, SampledLadder> solved = new HashMap<>();
 
   SettlingCircuit(ChannelModel model, Limits switchOhms, Limits pin, Limits hold) {
     this.model = model;
-    this.evaluations =
-        model.lastActive().isPresent() ? EVALUATIONS_BEHIND_AMPLIFIER : EVALUATIONS;
+    this.evaluations = model.lastActive().isPresent() ? EVALUATIONS_BEHIND_AMPLIFIER : EVALUATIONS;
     this.switchOhms = switchOhms.high();
     this.pin = pin;
     this.hold = hold;
@@ -202,8 +203,7 @@ final class SettlingCircuit {
     return new double[] {sum, start};
   }
 
-  private double[][] residuals(
-      Question question, double[] point, double scale, Double reservoir) {
+  private double[][] residuals(Question question, double[] point, double scale, Double reservoir) {
     double x = varies ? point[point.length - 1] : model.measures().low();
     double slew = slewTime(question, point, x);
     List<Visit> visits = question.visits();
@@ -248,7 +248,8 @@ final class SettlingCircuit {
       }
     }
     double reaching =
-        step * Slewing.outputStep(loop.outputOhms(), ladder(point, 1, null).rungs(), sampler(point));
+        step
+            * Slewing.outputStep(loop.outputOhms(), ladder(point, 1, null).rungs(), sampler(point));
     return Slewing.time(reaching, active.traits().slewRate(), loop.hertz());
   }
 
@@ -303,8 +304,7 @@ final class SettlingCircuit {
 
   /** What the last amplifier has to drive at its closed-loop bandwidth, Ω. */
   double load(Drive.ClosedLoop loop, double[] point) {
-    return FrequencyResponse.loadOhms(
-        ladder(point, 1, null).rungs(), sampler(point), loop.hertz());
+    return FrequencyResponse.loadOhms(ladder(point, 1, null).rungs(), sampler(point), loop.hertz());
   }
 
   boolean hasReservoir() {

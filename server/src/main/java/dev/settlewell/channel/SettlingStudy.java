@@ -65,9 +65,7 @@ final class SettlingStudy {
 
   /** Lowest and highest settling error at a measured value, V; zero where it is not known. */
   double[] extremes(double x) {
-    return worst == null
-        ? new double[] {0, 0}
-        : circuit.extremes(question, worst.point(), x);
+    return worst == null ? new double[] {0, 0} : circuit.extremes(question, worst.point(), x);
   }
 
   /** Places of converter values that are typical only and that the worst case rests on. */
@@ -85,8 +83,7 @@ final class SettlingStudy {
     Slot.Stated<Toleranced> pin = inputs.optional(adc.quantity("pin-capacitance"));
     boolean once = timing.visits(model.name()) == 1;
     inputs.include(once ? timing.inputs() : timing.allInputs());
-    Optional<List<StartRange>> starts =
-        inputs.complete() ? starts(adc, inputs) : Optional.empty();
+    Optional<List<StartRange>> starts = inputs.complete() ? starts(adc, inputs) : Optional.empty();
     if (!inputs.complete() || starts.isEmpty()) {
       for (String[] name : NAMES) {
         String unit = name[1].isEmpty() ? model.unit() : name[1];
@@ -203,24 +200,23 @@ final class SettlingStudy {
     double measured = Math.abs(found.error() / model.slope(found.x()));
     String formula = "held voltage at the end of acquisition - open-circuit voltage";
     Figure.Operand[] operands = {
-      operand("start of the hold capacitor", found.start(), "V"),
-      operand("hold capacitor", found.point()[found.point().length - 2], "F"),
+      Figure.Operand.of("start of the hold capacitor", found.start(), "V"),
+      Figure.Operand.of("hold capacitor", found.point()[found.point().length - 2], "F"),
       new Figure.Operand(
           "acquisition",
           question.visits().get(0).acquisition(),
           "s",
           Optional.of(model.part().either("acquisition").place()))
     };
-    figures.add(
-        Figure.of("settling-error", found.error(), "V", formula, operands).at(found.x()));
+    figures.add(Figure.of("settling-error", found.error(), "V", formula, operands).at(found.x()));
     figures.add(
         Figure.of(
                 "settling-error-lsb",
                 found.magnitude() / model.lsb(),
                 "LSB",
                 "|settling-error| / lsb",
-                operand("settling-error", found.error(), "V"),
-                operand("lsb", model.lsb(), "V"))
+                Figure.Operand.of("settling-error", found.error(), "V"),
+                Figure.Operand.of("lsb", model.lsb(), "V"))
             .at(found.x()));
     figures.add(
         Figure.of(
@@ -228,7 +224,7 @@ final class SettlingStudy {
                 measured,
                 model.unit(),
                 "|settling-error| / slope of the pin's voltage",
-                operand("settling-error", found.error(), "V"))
+                Figure.Operand.of("settling-error", found.error(), "V"))
             .at(found.x()));
     figures.add(Figure.of("worst-start", found.start(), "V", "where the worst case starts"));
   }
@@ -250,16 +246,16 @@ final class SettlingStudy {
             "s",
             "last time the settling error crosses the allowance, + acquisition-overhead;"
                 + " at least minimum-acquisition",
-            operand("settle-within", allowance, "V"),
-            operand("acquisition-overhead", timing.overhead(), "s")));
+            Figure.Operand.of("settle-within", allowance, "V"),
+            Figure.Operand.of("acquisition-overhead", timing.overhead(), "s")));
     figures.add(
         Figure.of(
             "required-acquisition-cycles",
             cycles,
             "cycles",
             "required-acquisition x fastest clock, rounded up",
-            operand("required-acquisition", seconds, "s"),
-            operand("fastest clock", timing.clock().high(), "Hz")));
+            Figure.Operand.of("required-acquisition", seconds, "s"),
+            Figure.Operand.of("fastest clock", timing.clock().high(), "Hz")));
     for (double count : timing.offered()) {
       if (count >= cycles) {
         figures.add(
@@ -282,7 +278,7 @@ final class SettlingStudy {
             circuit.load(loop, worst.point()),
             "Ω",
             "|impedance| behind the last amplifier at its closed-loop bandwidth",
-            operand("closed-loop bandwidth", loop.hertz(), "Hz"),
+            Figure.Operand.of("closed-loop bandwidth", loop.hertz(), "Hz"),
             new Figure.Operand(
                 "output-resistance",
                 loop.outputOhms(),
@@ -323,9 +319,9 @@ final class SettlingStudy {
               reservoir
                   ? "acquisition / ((R_source + R_switch) C_hold + R_source C_pin)"
                   : "acquisition / ((R_source + R_switch) C_hold)",
-              operand("R_source", ohms, "Ω"),
-              operand("R_switch", circuit.switchOhms(), "Ω"),
-              operand("C_hold", hold, "F")));
+              Figure.Operand.of("R_source", ohms, "Ω"),
+              Figure.Operand.of("R_switch", circuit.switchOhms(), "Ω"),
+              Figure.Operand.of("C_hold", hold, "F")));
     }
   }
 
@@ -351,10 +347,7 @@ final class SettlingStudy {
     }
     OptionalDouble factor =
         Remedies.largest(
-            k -> circuit.at(question, worst.point(), k, null).magnitude(),
-            allowance,
-            1e-4,
-            1e4);
+            k -> circuit.at(question, worst.point(), k, null).magnitude(), allowance, 1e-4, 1e4);
     if (factor.isEmpty()) {
       return Figure.none(
           "largest-source-resistance", "Ω", "no source resistance settles in this acquisition");
@@ -367,8 +360,8 @@ final class SettlingStudy {
         factor.getAsDouble() * present,
         "Ω",
         "all resistance from the sensor to the pin scaled until the allowance is just kept",
-        operand("source-resistance", present, "Ω"),
-        operand("factor", factor.getAsDouble(), "1"));
+        Figure.Operand.of("source-resistance", present, "Ω"),
+        Figure.Operand.of("factor", factor.getAsDouble(), "1"));
   }
 
   /** The resistors that make up the source resistance, the largest first, with their places. */
@@ -378,8 +371,7 @@ final class SettlingStudy {
     double[] p = model.forward().nominal();
     return model.stated().stream()
         .filter(value -> indices.contains(value.parameter()))
-        .sorted(
-            Comparator.comparingDouble((Parameters.Stated s) -> p[s.parameter()]).reversed())
+        .sorted(Comparator.comparingDouble((Parameters.Stated s) -> p[s.parameter()]).reversed())
         .map(s -> new Figure.Operand(s.row(), p[s.parameter()], "Ω", Optional.of(s.place())))
         .toArray(Figure.Operand[]::new);
   }
@@ -406,7 +398,7 @@ final class SettlingStudy {
         found.getAsDouble(),
         "F",
         "capacitor nearest the pin from which on its low end keeps the allowance",
-        operand("low end / nominal", lowShare, "1"));
+        Figure.Operand.of("low end / nominal", lowShare, "1"));
   }
 
   /** The pin before it at either rail, as a fault would leave it. */
@@ -424,7 +416,8 @@ final class SettlingStudy {
             .toList();
     SettlingCircuit.Question asked =
         new SettlingCircuit.Question(question.visits(), question.period(), rails);
-    // The error is the start's distance times what the circuit leaves of it: the same point is worst.
+    // The error is the start's distance times what the circuit leaves of it: the same point is
+    // worst.
     SettlingCircuit.Worst found = circuit.at(asked, worst.point(), 1, null);
     figures.add(
         Figure.of(
@@ -432,7 +425,7 @@ final class SettlingStudy {
                 found.error(),
                 "V",
                 "settling error with the pin before it at either rail",
-                operand("upper rail", top, "V"))
+                Figure.Operand.of("upper rail", top, "V"))
             .at(found.x()));
   }
 
@@ -526,9 +519,5 @@ final class SettlingStudy {
       return null;
     }
     return new StartRange(pin.nominalLow(), pin.nominalHigh(), false);
-  }
-
-  private static Figure.Operand operand(String name, double value, String unit) {
-    return new Figure.Operand(name, value, unit, Optional.empty());
   }
 }

@@ -3,7 +3,8 @@ package dev.settlewell.channel;
 /**
  * Where the hold capacitor may start a visit, V.
  *
- * @param ownVoltage true where the visit before was of the same channel: it starts where it must end
+ * @param ownVoltage true where the visit before was of the same channel: it starts where it must
+ *     end
  */
 record StartRange(double low, double high, boolean ownVoltage) {
 

@@ -9,8 +9,8 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * A sensor given by points, interpolated: a voltage, a current, or a resistance to ground (or from a
- * supply).
+ * A sensor given by points, interpolated: a voltage, a current, or a resistance to ground (or from
+ * a supply).
  */
 record TableSensor(
     PiecewiseLinear curve,

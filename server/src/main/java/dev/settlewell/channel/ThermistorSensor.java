@@ -12,8 +12,8 @@ import java.util.Optional;
  * A thermistor between the node and ground, or between a supply and the node.
  *
  * @param r25 parameter: resistance at 25 °C
- * @param beta parameter; -1 where Steinhart-Hart coefficients give the curve, which {@code r25} then
- *     scales
+ * @param beta parameter; -1 where Steinhart-Hart coefficients give the curve, which {@code r25}
+ *     then scales
  */
 record ThermistorSensor(
     int r25, int beta, double r25Nominal, Curve domain, int from, int accuracy, double dissipation)

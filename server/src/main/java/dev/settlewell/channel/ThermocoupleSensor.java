@@ -31,8 +31,7 @@ record ThermocoupleSensor(
         bench.measuredError("sensor-accuracy", sensor.deviation("accuracy"), bench.measures());
     Thermocouple.Type letter = Thermocouple.Type.valueOf(type.value());
     int tolerance = tolerance(sensor, letter, bench);
-    return new ThermocoupleSensor(
-        letter, Thermocouple.of(letter), junction, accuracy, tolerance);
+    return new ThermocoupleSensor(letter, Thermocouple.of(letter), junction, accuracy, tolerance);
   }
 
   private static int junction(Part cold, Bench bench) {
@@ -44,7 +43,9 @@ record ThermocoupleSensor(
     double middle = (range.value().low() + range.value().high()) / 2;
     int index = bench.parameters.add(middle);
     double limit =
-        accuracy.value().tolerances().stream().mapToDouble(t -> Math.max(t.minus(), t.plus())).sum();
+        accuracy.value().tolerances().stream()
+            .mapToDouble(t -> Math.max(t.minus(), t.plus()))
+            .sum();
     bench.parameters.add(
         Spread.of(
             "cold-junction",

@@ -50,9 +50,7 @@ final class TimingFigures {
   }
 
   private static double utilisation(ScanTiming scan) {
-    return scan.rate() == null
-        ? 1
-        : scan.scanTime(scan.clock().low()) / scan.shortestPeriod();
+    return scan.rate() == null ? 1 : scan.scanTime(scan.clock().low()) / scan.shortestPeriod();
   }
 
   /** Of a scan. */
@@ -74,17 +72,17 @@ final class TimingFigures {
             timing.conversion(timing.clock().nominal()),
             "s",
             "conversion-cycles / clock",
-            operand("conversion-cycles", timing.conversionCycles(), "cycles"),
-            operand("clock", timing.clock().nominal(), "Hz")));
+            Figure.Operand.of("conversion-cycles", timing.conversionCycles(), "cycles"),
+            Figure.Operand.of("clock", timing.clock().nominal(), "Hz")));
     figures.add(
         Figure.of(
             "scan-time",
             timing.scanTime(slow),
             "s",
             "sum of acquisitions and conversions at the slowest clock + gaps between them",
-            operand("slowest clock", slow, "Hz"),
-            operand("gap", timing.gap(), "s"),
-            operand("visits", timing.order().size(), "1")));
+            Figure.Operand.of("slowest clock", slow, "Hz"),
+            Figure.Operand.of("gap", timing.gap(), "s"),
+            Figure.Operand.of("visits", timing.order().size(), "1")));
     figures.add(Figure.of("scan-period", timing.shortestPeriod(), "s", "1 / greatest rate"));
     figures.add(Figure.of("scan-period-longest", timing.longestPeriod(), "s", "1 / least rate"));
     figures.add(Figure.of("scan-rate", 1 / timing.nominalPeriod(), "Hz", "scans per second"));
@@ -94,8 +92,8 @@ final class TimingFigures {
             utilisation(timing),
             "1",
             "scan-time / shortest period",
-            operand("scan-time", timing.scanTime(slow), "s"),
-            operand("shortest period", timing.shortestPeriod(), "s")));
+            Figure.Operand.of("scan-time", timing.scanTime(slow), "s"),
+            Figure.Operand.of("shortest period", timing.shortestPeriod(), "s")));
     if (!others.isEmpty() && others.stream().allMatch(ScanTiming::complete)) {
       double wait = others.stream().mapToDouble(o -> o.scanTime(o.clock().low())).sum();
       figures.add(
@@ -138,8 +136,7 @@ final class TimingFigures {
     return figures;
   }
 
-  private static void acquisition(
-      ChannelModel model, ScanTiming timing, List<Figure> figures) {
+  private static void acquisition(ChannelModel model, ScanTiming timing, List<Figure> figures) {
     double fast = timing.clock().high();
     Slot<Either> stated = model.part().either("acquisition");
     double seconds = timing.acquisition(model.name(), fast, timing.shortestPeriod());
@@ -159,8 +156,7 @@ final class TimingFigures {
               OptionalDouble.empty(),
               "stated, or the next offered count not below the stated time at the fastest clock",
               List.of(
-                  new Figure.Operand(
-                      "acquisition", seconds, "s", Optional.of(stated.place())))));
+                  new Figure.Operand("acquisition", seconds, "s", Optional.of(stated.place())))));
     }
   }
 
@@ -185,7 +181,7 @@ final class TimingFigures {
             worst,
             "1",
             "largest |spacing - mean spacing| / mean spacing",
-            operand("mean spacing", mean, "s")));
+            Figure.Operand.of("mean spacing", mean, "s")));
   }
 
   private static void skew(ChannelModel model, ScanTiming timing, List<Figure> figures) {
@@ -218,9 +214,5 @@ final class TimingFigures {
   private static Figure figure(String name, double value, String unit, String formula, Place at) {
     return Figure.of(
         name, value, unit, formula, new Figure.Operand(name, value, unit, Optional.of(at)));
-  }
-
-  private static Figure.Operand operand(String name, double value, String unit) {
-    return new Figure.Operand(name, value, unit, Optional.empty());
   }
 }

@@ -35,7 +35,6 @@ record Transducer(double x0, double slope, double from, double to) {
     }
     Range from = spans(sensor, bench);
     Range to = output.value();
-    return new Transducer(
-        from.low(), (to.high() - to.low()) / from.width(), to.low(), to.high());
+    return new Transducer(from.low(), (to.high() - to.low()) / from.width(), to.low(), to.high());
   }
 }
