@@ -33,7 +33,7 @@ final class BandAboveHalfRate extends ChannelCheck {
       return;
     }
     double factor = 2 * band / rate;
-    double scanRate = channel.scanNumber("scan-rate");
+    double scanRate = channel.scanRate();
     String above = Words.of(factor * scanRate, "Hz");
     report.accept(
         FindingBuilder.of(this, channel, "band")

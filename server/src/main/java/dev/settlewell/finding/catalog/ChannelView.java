@@ -89,13 +89,19 @@ record ChannelView(Analysis analysis, ChannelFigures figures, Part part) {
     return figures.scan();
   }
 
-  /** A figure of this channel's scan, NaN where it has none. */
-  double scanNumber(String figure) {
-    return figures
-        .scan()
-        .map(scan -> analysis.scans().get(scan.name()))
-        .map(scan -> scan.figures().value(figure).orElse(Double.NaN))
-        .orElse(Double.NaN);
+  /** Conversions that go into one result. */
+  int average() {
+    return part.number("average").orElse(1.0).intValue();
+  }
+
+  /** Visits of the channel per second, NaN where they are not known. */
+  double sampleRate() {
+    return number("result-rate") * average();
+  }
+
+  /** How often a second the whole order is gone through, NaN where it is not known. */
+  double scanRate() {
+    return sampleRate() / figures.visits();
   }
 
   Optional<Budget> budget() {

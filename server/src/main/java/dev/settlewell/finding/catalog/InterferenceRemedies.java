@@ -93,23 +93,22 @@ final class InterferenceRemedies {
    * The smallest mean that takes the line out, at the rate of the visits; empty where none does.
    */
   private OptionalInt mean() {
-    double longest = channel.scanNumber("scan-period-longest");
-    double shortest = channel.scanNumber("scan-period");
-    int visits = channel.figures().visits();
-    int present = channel.part().number("average").orElse(1.0).intValue();
-    if (!(longest > 0) || !(shortest > 0) || visits != 1) {
+    double slowest = channel.number("result-rate-least") * channel.average();
+    // The rate's tolerance is the same on both sides of its nominal value, and small.
+    double fastest = channel.sampleRate() * channel.sampleRate() / slowest;
+    if (!(slowest > 0) || channel.figures().visits() != 1) {
       return OptionalInt.empty();
     }
     double before =
-        Averaging.worstEvenGain(line.low(), line.high(), 1 / longest, 1 / shortest, present);
+        Averaging.worstEvenGain(line.low(), line.high(), slowest, fastest, channel.average());
     double band = channel.value("band").orElse(0);
-    int mostForBand = band > 0 ? (int) (visits / longest / (2 * band)) : LARGEST_MEAN;
+    int mostForBand = band > 0 ? (int) (slowest / (2 * band)) : LARGEST_MEAN;
     return Averaging.countFor(
         before * share,
         line.low(),
         line.high(),
-        1 / longest,
-        1 / shortest,
+        slowest,
+        fastest,
         Math.min(LARGEST_MEAN, mostForBand));
   }
 
@@ -128,7 +127,7 @@ final class InterferenceRemedies {
     double results = channel.number("result-rate");
     double turns = StrictMath.floor(line.frequency() / results);
     double below = line.frequency() / (turns + 0.5);
-    double scale = channel.scanNumber("scan-rate") / results;
+    double scale = channel.scanRate() / results;
     return below > 2 * channel.value("band").orElse(0) ? below * scale : Double.NaN;
   }
 }

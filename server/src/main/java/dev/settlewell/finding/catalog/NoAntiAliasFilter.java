@@ -25,7 +25,7 @@ final class NoAntiAliasFilter extends ChannelCheck {
 
   @Override
   void check(ChannelView channel, Consumer<Finding> report) {
-    double half = channel.scanNumber("scan-rate") * channel.figures().visits() / 2;
+    double half = channel.sampleRate() / 2;
     double corner = corner(channel);
     boolean said = !channel.part().slot("interferers").isMissing();
     boolean averaged = channel.has("average") || channel.has("oversampling");

@@ -33,7 +33,7 @@ final class UnevenSampling extends ChannelCheck {
     if (!(off > EVEN)) {
       return;
     }
-    double rate = channel.scanNumber("scan-rate") * channel.figures().visits();
+    double rate = channel.sampleRate();
     double band = channel.number("band");
     boolean fast = band > SLOW_BAND * rate;
     String message =
