@@ -17,11 +17,16 @@ import dev.settlewell.vocabulary.Kind;
 import dev.settlewell.vocabulary.Vocabulary;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 
 /** What is told of the thing under the cursor: its meaning, its value as read, its figures. */
 public final class Hover {
   /** The text, and the stretch it is about. */
   public record Told(Span span, Prose prose) {}
+
+  /** The keys of a converter that its own figures rest on; all others act in its channels. */
+  private static final Set<String> CONVERTER_TIMING =
+      Set.of("clock", "clock-limits", "conversion-cycles", "acquisition-overhead");
 
   private final Checked checked;
   private final Prose prose = new Prose();
@@ -210,10 +215,12 @@ public final class Hover {
         .nameAround("scan")
         .map(checked.analysis().scans()::get)
         .ifPresent(scan -> all(scan.figures()));
-    piece
-        .nameAround("converter")
-        .map(checked.analysis().converters()::get)
-        .ifPresent(converter -> all(converter.figures()));
+    if (CONVERTER_TIMING.contains(piece.labelText())) {
+      piece
+          .nameAround("converter")
+          .map(checked.analysis().converters()::get)
+          .ifPresent(converter -> all(converter.figures()));
+    }
   }
 
   private void some(Figures figures, List<String> names, String measuredUnit) {

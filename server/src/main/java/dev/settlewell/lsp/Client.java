@@ -8,11 +8,15 @@ import org.eclipse.lsp4j.ConfigurationItem;
 import org.eclipse.lsp4j.ConfigurationParams;
 import org.eclipse.lsp4j.MessageParams;
 import org.eclipse.lsp4j.MessageType;
+import org.eclipse.lsp4j.ProgressParams;
 import org.eclipse.lsp4j.PublishDiagnosticsParams;
 import org.eclipse.lsp4j.Registration;
 import org.eclipse.lsp4j.RegistrationParams;
+import org.eclipse.lsp4j.WorkDoneProgressCreateParams;
+import org.eclipse.lsp4j.WorkDoneProgressNotification;
 import org.eclipse.lsp4j.jsonrpc.Endpoint;
 import org.eclipse.lsp4j.jsonrpc.json.JsonRpcMethod;
+import org.eclipse.lsp4j.jsonrpc.messages.Either;
 
 /** What this server says to a client of its own accord. */
 final class Client {
@@ -50,6 +54,16 @@ final class Client {
   CompletableFuture<?> register(Registration registration) {
     return endpoint.request(
         "client/registerCapability", new RegistrationParams(List.of(registration)));
+  }
+
+  CompletableFuture<?> createProgress(String token) {
+    return endpoint.request(
+        "window/workDoneProgress/create",
+        new WorkDoneProgressCreateParams(Either.forLeft(token)));
+  }
+
+  void progress(String token, WorkDoneProgressNotification value) {
+    endpoint.notify("$/progress", new ProgressParams(Either.forLeft(token), Either.forLeft(value)));
   }
 
   /** Asks the client to ask again: {@code diagnostic}, {@code inlayHint}, {@code codeLens}. */

@@ -32,8 +32,11 @@ final class Publisher {
 
   private final Map<String, Shown> shown = new HashMap<>();
 
+  private final Progress progress;
+
   Publisher(Session session) {
     this.session = session;
+    this.progress = new Progress(session.client());
   }
 
   /** The sheet, or something it rests on, is not what it was; also where it was closed. */
@@ -50,10 +53,17 @@ final class Publisher {
     Set<String> names = new LinkedHashSet<>(shown.keySet());
     View view = session.view();
     names.addAll(view.sheets());
-    for (String name : names) {
-      boolean open = view.drafts().get(name).isPresent();
-      enqueue(name, open ? Worker.Rank.EDIT : Worker.Rank.BACKGROUND);
+    if (view.abilities().pulls()) {
+      return;
     }
+    List<String> unopened =
+        names.stream().filter(name -> view.drafts().get(name).isEmpty()).toList();
+    progress.start(unopened.size(), view.abilities());
+    names.stream()
+        .filter(name -> view.drafts().get(name).isPresent())
+        .forEach(name -> enqueue(name, Worker.Rank.EDIT));
+    unopened.forEach(name -> enqueue(name, Worker.Rank.BACKGROUND));
+    session.worker().post(Worker.Rank.BACKGROUND, progress::finish);
   }
 
   private void enqueue(String name, Worker.Rank rank) {
@@ -66,6 +76,9 @@ final class Publisher {
     waiting.remove(name);
     View view = session.view();
     Optional<Draft> draft = view.drafts().get(name);
+    if (draft.isEmpty()) {
+      progress.step();
+    }
     boolean wanted = draft.isPresent() || view.sheets().contains(name);
     List<Diagnostic> diagnostics =
         wanted ? Diagnosis.of(name, view, session.faults()) : List.of();

@@ -197,4 +197,20 @@ class WorkspaceSyncTest {
       client.reply(client.said("workspace/configuration"), List.of(List.of()));
     }
   }
+
+  /** A client that shows progress is told of many sheets, from beginning to end. */
+  @Test
+  void progressOfManySheets() throws IOException {
+    sheet(".git/config", "");
+    for (int i = 0; i < 12; i++) {
+      sheet("s" + i + ".channels.yaml", SUPPLIES);
+    }
+    Object shows = Map.of("window", Map.of("workDoneProgress", true));
+    try (FakeClient client = client(shows, folder)) {
+      JsonObject create = client.said("window/workDoneProgress/create");
+      client.reply(create, null);
+      client.ask("workspace/symbol", Map.of("query", ""));
+      client.drainAtEnd("$/progress");
+    }
+  }
 }
