@@ -45,10 +45,7 @@ public final class Remedies {
         && fix.edits().stream().allMatch(edit -> edit.place().sheet().equals(text.name()));
   }
 
-  /**
-   * An expired or idle acceptance is part of its finding: it may go or come with it, so that
-   * mending a thing is not refused because its acceptance falls idle.
-   */
+  /** An acceptance that falls idle with the finding it held back is no reason against mending it. */
   private static boolean helps(Finding finding, List<Finding> before, List<Finding> after) {
     return after.stream().noneMatch(finding::sameAs)
         && after.stream()
