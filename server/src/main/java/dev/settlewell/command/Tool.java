@@ -50,6 +50,7 @@ public final class Tool implements Runnable {
     CommandLine line = new CommandLine(new Tool());
     line.addSubcommand(new CheckCommand(console));
     line.addSubcommand(new FiguresCommand(console));
+    line.addSubcommand(new TrialsCommand(console));
     line.addSubcommand(new ExplainCommand(console));
     line.addSubcommand(new MendCommand(console));
     line.addSubcommand(new CompareCommand(console));

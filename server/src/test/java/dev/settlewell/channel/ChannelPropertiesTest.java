@@ -108,8 +108,15 @@ class ChannelPropertiesTest {
       ChannelFigures a = before.get(i);
       ChannelFigures b = after.get(i);
       for (String name :
-          List.of("settling-error", "settling-error-lsb", "settling-error-measured",
-              "settling-error-neighbour-fault", "pin-low", "pin-high", "droop", "range-used")) {
+          List.of(
+              "settling-error",
+              "settling-error-lsb",
+              "settling-error-measured",
+              "settling-error-neighbour-fault",
+              "pin-low",
+              "pin-high",
+              "droop",
+              "range-used")) {
         close(sheet, name, value(a, name), value(b, name));
       }
       close(
@@ -127,10 +134,7 @@ class ChannelPropertiesTest {
       for (int j = 0; j < a.aliases().size(); j++) {
         close(sheet, "alias", a.aliases().get(j).gain(), b.aliases().get(j).gain());
         close(
-            sheet,
-            "lands",
-            a.aliases().get(j).landsHigh() / time,
-            b.aliases().get(j).landsHigh());
+            sheet, "lands", a.aliases().get(j).landsHigh() / time, b.aliases().get(j).landsHigh());
       }
     }
   }
@@ -199,9 +203,7 @@ class ChannelPropertiesTest {
     lines.replaceAll(line -> random.nextInt(4) == 0 ? line + "   # 4.7 kΩ: as built" : line);
     lines.add(random.nextInt(lines.size()), "# another remark, {with: [brackets");
     String commented = String.join("\n", lines) + "\n";
-    assertThat(said(channels(sheet, commented)))
-        .as(sheet.shown())
-        .isEqualTo(said(channels(sheet)));
+    assertThat(said(channels(sheet, commented))).as(sheet.shown()).isEqualTo(said(channels(sheet)));
   }
 
   /**
@@ -225,8 +227,7 @@ class ChannelPropertiesTest {
         double x = model.measures().low() + random.nextDouble() * model.measures().width();
         double ambient = ambient(model, random);
         double[] p = board(model, x, ambient, random);
-        String shown =
-            "%s at %s, board %s\n%s".formatted(model.name(), x, board, sheet.shown());
+        String shown = "%s at %s, board %s\n%s".formatted(model.name(), x, board, sheet.shown());
         assertThat(Math.abs(model.forward().error(x, p)))
             .as(shown)
             .isLessThanOrEqualTo(hard * (1 + slack));
@@ -310,12 +311,13 @@ class ChannelPropertiesTest {
     }
   }
 
-  /** Without other noise a passive path gives kT/C of the hold capacitor, whatever it is made of. */
+  /**
+   * Without other noise a passive path gives kT/C of the hold capacitor, whatever it is made of.
+   */
   @ParameterizedTest
   @MethodSource("seeds")
   void passivePathsGiveTheNoiseOfTheHoldCapacitor(long seed) {
-    Generated sheet =
-        SheetGenerator.of(seed).with(t -> t.replace("    noise: 0.4 LSB\n", ""));
+    Generated sheet = SheetGenerator.of(seed).with(t -> t.replace("    noise: 0.4 LSB\n", ""));
     for (ChannelFigures channel : channels(sheet)) {
       ChannelModel model = model(sheet, channel);
       if (model.lastActive().isPresent()) {

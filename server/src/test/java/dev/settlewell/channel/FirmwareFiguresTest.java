@@ -74,8 +74,10 @@ class FirmwareFiguresTest {
     assertThat(multiplier).isLessThanOrEqualTo(32767);
   }
 
-  /** NAMUR NE 43 (common practice): failure at or below 3.6 mA and at or above 21 mA; 0.9 V and
-   *  5.25 V across 250 ohm. */
+  /**
+   * NAMUR NE 43 (common practice): failure at or below 3.6 mA and at or above 21 mA; 0.9 V and 5.25
+   * V across 250 ohm.
+   */
   @Test
   void loopFailureCodesFollowNe43() {
     ChannelFigures a =

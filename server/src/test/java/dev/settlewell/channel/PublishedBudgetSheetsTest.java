@@ -8,7 +8,9 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
-/** Published error budgets, each rebuilt as a sheet; 24 bits or more, so that codes cost nothing. */
+/**
+ * Published error budgets, each rebuilt as a sheet; 24 bits or more, so that codes cost nothing.
+ */
 class PublishedBudgetSheetsTest {
 
   private static Budget budget(String supplies, String converter, String channel) {
@@ -20,7 +22,8 @@ class PublishedBudgetSheetsTest {
           adc:
         %schannels:
           input:
-        %s"""
+        %s\
+        """
             .formatted(supplies.indent(2), converter.indent(4), channel.indent(4));
     ChannelFigures figures = TestSheets.channel(sheet, "input");
     assertThat(figures.faults()).isEmpty();
@@ -198,8 +201,7 @@ class PublishedBudgetSheetsTest {
   /** JCGM 101:2008, §9.2.2 (from memory): the sum of four N(0,1) lies within ±3.92 at 95 %. */
   @Test
   void fourNormalRows() {
-    Budget budget =
-        fourRows(Stream.of("0.1 % (k=1)", "0.1 % (k=1)", "0.1 % (k=1)", "0.1 % (k=1)"));
+    Budget budget = fourRows(Stream.of("0.1 % (k=1)", "0.1 % (k=1)", "0.1 % (k=1)", "0.1 % (k=1)"));
     assertThat(1e3 * budget.combined()).isCloseTo(2, within(1e-4));
     assertThat(1e3 * budget.expanded()).isCloseTo(3.92, within(0.005));
   }

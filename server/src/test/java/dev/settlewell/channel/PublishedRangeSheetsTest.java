@@ -17,13 +17,14 @@ class PublishedRangeSheetsTest {
   /** A channel that no scan samples: what can be said of its voltages. */
   private static String sheet(String supplies, String converter, String channel) {
     return """
-        channel-sheet: 1
-        supplies:
-        %sconverters:
-          adc:
-        %schannels:
-          input:
-        %s"""
+    channel-sheet: 1
+    supplies:
+    %sconverters:
+      adc:
+    %schannels:
+      input:
+    %s\
+    """
         .formatted(supplies.indent(2), converter.indent(4), channel.indent(4));
   }
 
@@ -41,8 +42,7 @@ class PublishedRangeSheetsTest {
   }
 
   private static ChannelFigures converter(String converter) {
-    return channel(
-        "", converter, "measures: 0 V to 10 V\nsensor: {voltage: {resistance: 0 Ω}}\n");
+    return channel("", converter, "measures: 0 V to 10 V\nsensor: {voltage: {resistance: 0 Ω}}\n");
   }
 
   static List<String[]> weights() {
@@ -83,8 +83,7 @@ class PublishedRangeSheetsTest {
   @ParameterizedTest
   @CsvSource({"single-ended,152.6", "bipolar,305.2"})
   void bipolarInputsDoubleTheSpan(String input, double microvolts) {
-    ChannelFigures channel =
-        converter("bits: 16\nreference: 10 V\ninput: %s\n".formatted(input));
+    ChannelFigures channel = converter("bits: 16\nreference: 10 V\ninput: %s\n".formatted(input));
     assertThat(1e6 * value(channel, "lsb")).isCloseTo(microvolts, within(0.05));
     assertThat(value(channel, "full-scale")).isEqualTo(input.equals("bipolar") ? 20 : 10);
   }
@@ -116,8 +115,7 @@ class PublishedRangeSheetsTest {
     String path = "path:\n  - divider: {upper: 1 kΩ ±1 %, lower: 1 kΩ ±1 %}\n";
     String sensor = "sensor: {voltage: {}}\n";
     String adc = "bits: 12\nreference: 10 V\n";
-    assertThat(
-            value(channel("", adc, "measures: 0 V to 10 V\n" + sensor + path), "pin-high"))
+    assertThat(value(channel("", adc, "measures: 0 V to 10 V\n" + sensor + path), "pin-high"))
         .isCloseTo(5.05, within(1e-9));
     assertThat(value(channel("", adc, "measures: 10 V to 11 V\n" + sensor + path), "pin-low"))
         .isCloseTo(4.95, within(1e-9));
@@ -151,8 +149,7 @@ class PublishedRangeSheetsTest {
             overload: 0 V to 12 V
             """
                 .formatted(ohms));
-    assertThat(1e3 * value(channel, "overload-current"))
-        .isCloseTo(milliamperes, within(tolerance));
+    assertThat(1e3 * value(channel, "overload-current")).isCloseTo(milliamperes, within(tolerance));
   }
 
   /** The clamp current is largest at the least supply and the least resistance: Ohm's law. */
@@ -230,8 +227,7 @@ class PublishedRangeSheetsTest {
             "",
             "bits: 16\nreference: 1 V\n",
             "measures: %s\nsensor: {rtd: {excitation: 1 mA}}\n".formatted(measures));
-    double millivolts =
-        1e3 * value(channel, top ? "pin-nominal-high" : "pin-nominal-low");
+    double millivolts = 1e3 * value(channel, top ? "pin-nominal-high" : "pin-nominal-low");
     assertThat(millivolts).isCloseTo(Double.parseDouble(equation), within(1e-5));
     assertThat(millivolts).isCloseTo(Double.parseDouble(printed), within(0.0051));
   }
@@ -243,8 +239,7 @@ class PublishedRangeSheetsTest {
   /** IEC 60751: the limit of a class, in °C, is a row of its own, at each temperature. */
   @ParameterizedTest
   @MethodSource("tolerances")
-  void platinumClasses(
-      String celsius, String classA, String ohmA, String classB, String ohmB) {
+  void platinumClasses(String celsius, String classA, String ohmA, String classB, String ohmB) {
     double t = Double.parseDouble(celsius);
     String measures =
         t >= 850 ? "849.99 °C to 850 °C" : "%s °C to %s °C".formatted(celsius, t + 0.01);
@@ -328,8 +323,7 @@ class PublishedRangeSheetsTest {
   /** NIST tables: 4.096 mV with terminals at 25 °C is 124.3 °C, for the emf is added first. */
   @Test
   void coldJunctionAddsItsEmf() {
-    ChannelFigures channel =
-        behindAmplifier("K", "25 °C to 25.001 °C", "0 °C to 124.3 °C");
+    ChannelFigures channel = behindAmplifier("K", "25 °C to 25.001 °C", "0 °C to 124.3 °C");
     // A tenth of a degree of type K is 4 µV.
     assertThat(1e3 * value(channel, "pin-nominal-high")).isCloseTo(4.096, within(0.0021));
   }
@@ -385,7 +379,8 @@ class PublishedRangeSheetsTest {
       value = {
         "0 °C to 50 °C; {thermistor: {r25: 10 kΩ, beta: 3950 K}}; resistor: 1 kΩ; pull-up",
         "0 °C to 50 °C; {rtd: {}}; capacitor: 1 nF; pull-up",
-        "0 bar to 9 bar; {table: {points: [[0 bar, 10 Ω], [9 bar, 180 Ω]]}}; resistor: 1 kΩ; pull-up",
+        "0 bar to 9 bar; {table: {points: [[0 bar, 10 Ω], [9 bar, 180 Ω]]}}; resistor: 1 kΩ;"
+            + " pull-up",
         "4 mA to 20 mA; {current: {}}; resistor: 1 kΩ; shunt"
       })
   void sensorThatNothingDrives(String measures, String sensor, String path, String lacking) {

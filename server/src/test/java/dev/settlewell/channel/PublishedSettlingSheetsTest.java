@@ -15,17 +15,18 @@ class PublishedSettlingSheetsTest {
   /** One channel over the whole span of 1 V, whose hold capacitor starts each visit at 0 V. */
   private static String sheet(String converter, String rate, String channel) {
     return """
-        channel-sheet: 1
-        converters:
-          adc:
-            reference: 1 V
-            hold-starts-at: 0 V
-        %sscans:
-          only: {converter: adc, rate: %s, order: [input]}
-        channels:
-          input:
-            measures: 0 V to 1 V
-        %s"""
+    channel-sheet: 1
+    converters:
+      adc:
+        reference: 1 V
+        hold-starts-at: 0 V
+    %sscans:
+      only: {converter: adc, rate: %s, order: [input]}
+    channels:
+      input:
+        measures: 0 V to 1 V
+    %s\
+    """
         .formatted(converter.indent(4), rate, channel.indent(4));
   }
 
@@ -62,7 +63,14 @@ class PublishedSettlingSheetsTest {
   /** Analog Devices AN-1024 Rev. 0, Table 1: time constants to 1 LSB. */
   @ParameterizedTest
   @CsvSource({
-    "6,4.16", "8,5.55", "10,6.93", "12,8.32", "14,9.70", "16,11.09", "18,12.48", "20,13.86",
+    "6,4.16",
+    "8,5.55",
+    "10,6.93",
+    "12,8.32",
+    "14,9.70",
+    "16,11.09",
+    "18,12.48",
+    "20,13.86",
     "22,15.25"
   })
   void timeConstantsToOneLsb(int bits, double printed) {
@@ -123,15 +131,19 @@ class PublishedSettlingSheetsTest {
             settle-within: 0.25 LSB
             """
                 .formatted(cycles));
-    assertThat(figure(sheet, "largest-source-resistance") / 1e3)
-        .isCloseTo(kilohms, within(0.051));
+    assertThat(figure(sheet, "largest-source-resistance") / 1e3).isCloseTo(kilohms, within(0.051));
   }
 
   /** Motorola M68HC16 Z-series User's Manual, Table 8-10: 7.6 in every cell, 10 bit, 1/2 count. */
   @ParameterizedTest
   @CsvSource({
-    "100 Ω, 100 pF, 76e-9", "100 Ω, 10 nF, 7.6e-6", "1 kΩ, 10 nF, 76e-6", "10 kΩ, 1 nF, 76e-6",
-    "100 kΩ, 100 pF, 76e-6", "10 kΩ, 100 nF, 7.6e-3", "100 kΩ, 1 µF, 0.76"
+    "100 Ω, 100 pF, 76e-9",
+    "100 Ω, 10 nF, 7.6e-6",
+    "1 kΩ, 10 nF, 76e-6",
+    "10 kΩ, 1 nF, 76e-6",
+    "100 kΩ, 100 pF, 76e-6",
+    "10 kΩ, 100 nF, 7.6e-3",
+    "100 kΩ, 1 µF, 0.76"
   })
   void settlingTimeOfAnInput(String ohms, String farads, double seconds) {
     String sheet =
@@ -154,7 +166,9 @@ class PublishedSettlingSheetsTest {
     assertThat(found).isCloseTo(seconds, within(0.005 * seconds));
   }
 
-  /** Reservoir of {@code farads} behind {@code ohms}, hold 1.6 pF, 12 bit, 0.1 µs of acquisition. */
+  /**
+   * Reservoir of {@code farads} behind {@code ohms}, hold 1.6 pF, 12 bit, 0.1 µs of acquisition.
+   */
   private static String reservoir(String rate, String ohms, String farads, String within) {
     return sheet(
         """
@@ -267,8 +281,7 @@ class PublishedSettlingSheetsTest {
     "82 nF,10 kHz,4.34,0.005",
     "1 µF,10 kHz,4.11,0.005"
   })
-  void threeRegimesOfAnExternalCapacitor(
-      String farads, String rate, double lsb, double tolerance) {
+  void threeRegimesOfAnExternalCapacitor(String farads, String rate, double lsb, double tolerance) {
     String path = farads.isEmpty() ? "" : "capacitor: " + farads;
     assertThat(figure(tenPicofarads(rate, "1 µs", path), "settling-error-lsb"))
         .isCloseTo(lsb, within(tolerance));
@@ -276,9 +289,7 @@ class PublishedSettlingSheetsTest {
 
   /** 47 to 220 pF: the worst lies inside the box; SciPy, ends 129 and 116, inside 154 LSB. */
   @ParameterizedTest
-  @CsvSource({
-    "47 pF,129", "220 pF,116", "'{min: 47 pF, typical: 100 pF, max: 220 pF}',154"
-  })
+  @CsvSource({"47 pF,129", "220 pF,116", "'{min: 47 pF, typical: 100 pF, max: 220 pF}',154"})
   void worstCapacitanceLiesInsideItsTolerance(String farads, double lsb) {
     String sheet = tenPicofarads("1 kHz", "1 µs", "capacitor: " + farads);
     assertThat(figure(sheet, "settling-error-lsb")).isCloseTo(lsb, within(0.5));
@@ -388,12 +399,17 @@ class PublishedSettlingSheetsTest {
   /** ST 15060 Rev 6, Table 47, and Freescale data sheets: cycles over the clock. */
   @ParameterizedTest
   @CsvSource({
-    "1.5,0.11,0.005", "7.5,0.54,0.005", "13.5,0.96,0.005", "28.5,2.04,0.005", "41.5,2.96,0.005",
-    "55.5,3.96,0.005", "71.5,5.11,0.005", "239.5,17.1,0.05"
+    "1.5,0.11,0.005",
+    "7.5,0.54,0.005",
+    "13.5,0.96,0.005",
+    "28.5,2.04,0.005",
+    "41.5,2.96,0.005",
+    "55.5,3.96,0.005",
+    "71.5,5.11,0.005",
+    "239.5,17.1,0.05"
   })
   void acquisitionTimeOfOfferedCycles(String cycles, double microseconds, double tolerance) {
-    String sheet =
-        tenPicofarads("1 kHz", cycles + " cycles", "").replace("100 MHz", "14 MHz");
+    String sheet = tenPicofarads("1 kHz", cycles + " cycles", "").replace("100 MHz", "14 MHz");
     assertThat(figure(sheet, "acquisition") * 1e6).isCloseTo(microseconds, within(tolerance));
     assertThat(figure(sheet, "acquisition-cycles")).isEqualTo(Double.parseDouble(cycles));
   }

@@ -14,23 +14,24 @@ class PublishedTimingSheetsTest {
   private static String sheet(
       String clock, String conversion, String scan, String lines, String channel) {
     return """
-        channel-sheet: 1
-        converters:
-          adc:
-            bits: 12
-            reference: 1 V
-            clock: %s
-            conversion-cycles: %s
-            hold-capacitor: 0.001 pF
-            switch-resistance: 1 Ω
-        scans:
-          only: {converter: adc, %s}
-        interferers:
-          line: {%s, amplitude: 1 mV}
-        channels:
-          input:
-            measures: 0 V to 1 V
-        %s"""
+    channel-sheet: 1
+    converters:
+      adc:
+        bits: 12
+        reference: 1 V
+        clock: %s
+        conversion-cycles: %s
+        hold-capacitor: 0.001 pF
+        switch-resistance: 1 Ω
+    scans:
+      only: {converter: adc, %s}
+    interferers:
+      line: {%s, amplitude: 1 mV}
+    channels:
+      input:
+        measures: 0 V to 1 V
+    %s\
+    """
         .formatted(clock, conversion, scan, lines, channel.indent(4));
   }
 
@@ -58,8 +59,13 @@ class PublishedTimingSheetsTest {
    */
   @ParameterizedTest
   @CsvSource({
-    "6 MHz,5 MHz,1e6", "100 Hz,140 Hz,40", "5 Hz,10 Hz,0", "100 Hz,25 Hz,25", "100 Hz,70 Hz,30",
-    "100 Hz,160 Hz,40", "100 Hz,510 Hz,10"
+    "6 MHz,5 MHz,1e6",
+    "100 Hz,140 Hz,40",
+    "5 Hz,10 Hz,0",
+    "100 Hz,25 Hz,25",
+    "100 Hz,70 Hz,30",
+    "100 Hz,160 Hz,40",
+    "100 Hz,510 Hz,10"
   })
   void landsWherePublished(String rate, String frequency, double hertz) {
     Alias alias = alias(rate, frequency, "sensor: {voltage: {}}\n");
@@ -78,8 +84,7 @@ class PublishedTimingSheetsTest {
           "other-%s: {measures: 0 V to 1 V, sensor: {voltage: {}}, acquisition: 2 µs}\n"
               .formatted(i);
     }
-    String order =
-        "input, other-2, other-3, other-4, other-5, other-6, other-7, other-8";
+    String order = "input, other-2, other-3, other-4, other-5, other-6, other-7, other-8";
     String sheet =
         sheet(
                 "1 MHz",
@@ -101,12 +106,20 @@ class PublishedTimingSheetsTest {
   /** Frequency Devices, Appendix A (1999): six poles, relative to the -3 dB corner. */
   @ParameterizedTest
   @CsvSource({
-    "butterworth,800 Hz,-0.289,0.0005", "butterworth,900 Hz,-1.080,0.0005",
-    "butterworth,1.1 kHz,-6.17,0.005", "butterworth,1.5 kHz,-21.2,0.06",
-    "butterworth,2 kHz,-36.1,0.06", "butterworth,3 kHz,-57.3,0.06",
-    "butterworth,5 kHz,-83.9,0.06", "butterworth,10 kHz,-120,0.6",
-    "bessel,500 Hz,-0.728,0.0006", "bessel,800 Hz,-1.89,0.006", "bessel,1.2 kHz,-4.44,0.006",
-    "bessel,2 kHz,-14.2,0.06", "bessel,3 kHz,-30.7,0.06", "bessel,5 kHz,-55.9,0.06",
+    "butterworth,800 Hz,-0.289,0.0005",
+    "butterworth,900 Hz,-1.080,0.0005",
+    "butterworth,1.1 kHz,-6.17,0.005",
+    "butterworth,1.5 kHz,-21.2,0.06",
+    "butterworth,2 kHz,-36.1,0.06",
+    "butterworth,3 kHz,-57.3,0.06",
+    "butterworth,5 kHz,-83.9,0.06",
+    "butterworth,10 kHz,-120,0.6",
+    "bessel,500 Hz,-0.728,0.0006",
+    "bessel,800 Hz,-1.89,0.006",
+    "bessel,1.2 kHz,-4.44,0.006",
+    "bessel,2 kHz,-14.2,0.06",
+    "bessel,3 kHz,-30.7,0.06",
+    "bessel,5 kHz,-55.9,0.06",
     "bessel,10 kHz,-91.6,0.06"
   })
   void sixPoles(String response, String frequency, double printed, double tolerance) {
@@ -125,8 +138,8 @@ class PublishedTimingSheetsTest {
 
   /**
    * Journal of Southwest Jiaotong University 10062: second order at ten times 1 kHz, against DC.
-   * There the Chebyshev's ripple ends at 1 kHz; a sheet states the frequency 3 dB below DC, which is
-   * sqrt((1 + sqrt(2 + 1/ε²)) / 2) times that, 1.169 for 3 dB.
+   * There the Chebyshev's ripple ends at 1 kHz; a sheet states the frequency 3 dB below DC, which
+   * is sqrt((1 + sqrt(2 + 1/ε²)) / 2) times that, 1.169 for 3 dB.
    */
   @ParameterizedTest
   @CsvSource({

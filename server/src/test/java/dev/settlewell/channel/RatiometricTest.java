@@ -53,8 +53,7 @@ class RatiometricTest {
         "0 bar to 10 bar;"
             + " {voltage: {output: 0.2 V to 2.3 V, proportional-to: SUPPLY, accuracy: ±1 %}};"
             + " divider: {upper: 1 kΩ ±1 %, lower: 100 kΩ ±1 %}",
-        "-20 °C to 120 °C; {rtd: {class: B}};"
-            + " pull-up: {resistor: 1 kΩ ±0.1 %, to: SUPPLY}",
+        "-20 °C to 120 °C; {rtd: {class: B}};" + " pull-up: {resistor: 1 kΩ ±0.1 %, to: SUPPLY}",
         "0 bar to 10 bar;"
             + " {table: {points: [[0 bar, 0.2 V], [5 bar, 1.1 V], [10 bar, 2.3 V]],"
             + " proportional-to: SUPPLY}};"

@@ -112,41 +112,41 @@ public final class SheetGenerator {
 
   private String head(List<String> order) {
     return """
-        channel-sheet: 1
-        about: made from seed %s
-        ambient: %s °C to %s °C
-        defaults:
-          resistor: ±<percent:1> %% ±100 ppm/K
-          capacitor: ±<percent:10> %%
-        supplies:
-          logic: 3.3 V ±<percent:2> %%
-          ref: 2.5 V ±<percent:0.1> %% ±25 ppm/K
-          other: 3.0 V ±<percent:1> %%
-        converters:
-          adc:
-            bits: %s
-            supply: logic
-            reference: ref
-            clock: <hertz:%s> Hz ±<percent:%s> %%
-            conversion-cycles: %s
-            hold-capacitor: {typical: <farad:%s> F, max: <farad:%s> F}
-            switch-resistance: {max: <ohm:%s> Ω}
-        %s    pin-leakage: ±<ampere:%s> A
-            offset-error: ±2 LSB
-            gain-error: ±3 LSB
-            integral-nonlinearity: ±1.5 LSB
-            noise: 0.4 LSB
-        scans:
-          round:
-            converter: adc
-            rate: <hertz:%s> Hz ±<percent:0.5> %%
-            order: %s
-            gap: <second:2E-6> s
-        interferers:
-          mains: {frequency: <hertz:50> Hz ±1 %%, amplitude: 5 mV, harmonics: {2: 1 mV, 3: 0.5 mV}}
-          switcher: {frequency: <hertz:%s> Hz ±5 %%, amplitude: 10 mV}
-        channels:
-        """
+    channel-sheet: 1
+    about: made from seed %s
+    ambient: %s °C to %s °C
+    defaults:
+      resistor: ±<percent:1> %% ±100 ppm/K
+      capacitor: ±<percent:10> %%
+    supplies:
+      logic: 3.3 V ±<percent:2> %%
+      ref: 2.5 V ±<percent:0.1> %% ±25 ppm/K
+      other: 3.0 V ±<percent:1> %%
+    converters:
+      adc:
+        bits: %s
+        supply: logic
+        reference: ref
+        clock: <hertz:%s> Hz ±<percent:%s> %%
+        conversion-cycles: %s
+        hold-capacitor: {typical: <farad:%s> F, max: <farad:%s> F}
+        switch-resistance: {max: <ohm:%s> Ω}
+    %s    pin-leakage: ±<ampere:%s> A
+        offset-error: ±2 LSB
+        gain-error: ±3 LSB
+        integral-nonlinearity: ±1.5 LSB
+        noise: 0.4 LSB
+    scans:
+      round:
+        converter: adc
+        rate: <hertz:%s> Hz ±<percent:0.5> %%
+        order: %s
+        gap: <second:2E-6> s
+    interferers:
+      mains: {frequency: <hertz:50> Hz ±1 %%, amplitude: 5 mV, harmonics: {2: 1 mV, 3: 0.5 mV}}
+      switcher: {frequency: <hertz:%s> Hz ±5 %%, amplitude: 10 mV}
+    channels:
+    """
         .formatted(
             seed,
             -20 + random.nextInt(30),
@@ -169,13 +169,14 @@ public final class SheetGenerator {
   private String channel(String name) {
     String[] measured = measured();
     return """
-          %s:
-            measures: %s
-            needs: ±5 %% worst-case
-            sensor: %s
-            path: [%s]
-            acquisition: %s cycles
-        %s"""
+      %s:
+        measures: %s
+        needs: ±5 %% worst-case
+        sensor: %s
+        path: [%s]
+        acquisition: %s cycles
+    %s\
+    """
         .formatted(
             name,
             measured[0],
@@ -201,7 +202,8 @@ public final class SheetGenerator {
           new String[] {
             "0 bar to 10 bar",
             "{voltage: {output: 0.2 V to 2.3 V, accuracy: ±<percent:0.5> %, proportional-to: "
-                + pick("ref", "other") + "}}",
+                + pick("ref", "other")
+                + "}}",
             "{pull-down: <ohm:1.0E6> Ω}"
           };
       case 3 ->
@@ -225,7 +227,8 @@ public final class SheetGenerator {
       case 6 ->
           new String[] {
             "5 mm to 95 mm",
-            "{potentiometer: {resistance: " + ohms(2e3, 5e4)
+            "{potentiometer: {resistance: "
+                + ohms(2e3, 5e4)
                 + ", across: ref, spans: 0 mm to 100 mm}}",
             "{pull-down: <ohm:1.0E6> Ω}"
           };
@@ -255,8 +258,9 @@ public final class SheetGenerator {
 
   private static String amplifier(int gain) {
     return """
-        {amplifier: {gain: %s, gain-error: ±<percent:0.2> %%, level: 0.1 V, offset: ±50 µV, \
-        gain-bandwidth: <hertz:2.0E7> Hz, output-resistance: <ohm:%s> Ω}}"""
+    {amplifier: {gain: %s, gain-error: ±<percent:0.2> %%, level: 0.1 V, offset: ±50 µV, \
+    gain-bandwidth: <hertz:2.0E7> Hz, output-resistance: <ohm:%s> Ω}}\
+    """
         .formatted(gain, gain == 400 ? "0" : "100");
   }
 

@@ -21,7 +21,7 @@ class ToolTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"", "check", "figures", "explain", "serve", "mend", "compare"})
+  @ValueSource(strings = {"", "check", "figures", "trials", "explain", "serve", "mend", "compare"})
   void everyHelpFitsATerminalAndHasAnExample(String command) {
     Typed typed = Typed.in(folder, (command + " --help").trim().split(" "));
     assertThat(typed.code()).isZero();
