@@ -293,7 +293,9 @@ final class BlockScan {
     int at = dash;
     Level level = list;
     while (true) {
+      int inserted = 0;
       if (!mending.gap(at + 1)) {
+        inserted = 1;
         mending.syntax(
             at,
             at + 1,
@@ -306,7 +308,7 @@ final class BlockScan {
         level.last = Level.Last.OPEN;
         return;
       }
-      int column = content - row.content();
+      int column = content - row.content() + inserted;
       content = behindStrayMark(content, row.end());
       boolean nested = shapes.isItem(content);
       boolean number = Character.isDigit(mending.draft.at(content)); // `- 1:30` is no key

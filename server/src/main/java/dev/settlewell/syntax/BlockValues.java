@@ -28,11 +28,11 @@ final class BlockValues {
    */
   Last value(int from, Row row, Level level, String key) {
     int end = row.end();
-    int at = mending.textKeys.contains(key) ? from : behindProperties(from, end);
-    if (at >= end || mending.comment(at)) {
+    if (from < end && strayMarks(from, row, level)) {
       return Last.OPEN;
     }
-    if (strayMarks(at, row, level)) {
+    int at = mending.textKeys.contains(key) ? from : behindProperties(from, end);
+    if (at >= end || mending.comment(at)) {
       return Last.OPEN;
     }
     if (mending.textKeys.contains(key)) {
@@ -101,9 +101,10 @@ final class BlockValues {
       int next = at;
       if (mending.draft.at(at) == '!') {
         next = starts.tag(at);
-      }
-      while (!mending.gap(next)) {
-        next++;
+      } else {
+        while (!mending.gap(next)) {
+          next++;
+        }
       }
       at = mending.skipBlanks(next);
     }

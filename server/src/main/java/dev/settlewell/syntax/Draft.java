@@ -38,6 +38,15 @@ final class Draft {
     insertions.merge(offset, text, String::concat);
   }
 
+  boolean isDropped(int offset) {
+    return chars[offset] == DROPPED;
+  }
+
+  /** Puts blanks before the character at {@code offset}, in place of what was put there before. */
+  void indent(int offset, int blanks) {
+    insertions.put(offset, " ".repeat(blanks));
+  }
+
   void overwrite(int offset, char c) {
     chars[offset] = c;
   }

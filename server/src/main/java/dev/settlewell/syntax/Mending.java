@@ -52,7 +52,7 @@ final class Mending {
       start = 1;
     }
     int content = start;
-    while (content < line.end() && blank(content)) {
+    while (content < line.end() && (blank(content) || draft.isDropped(content))) {
       content++;
     }
     int end = line.end();
@@ -67,7 +67,7 @@ final class Mending {
   void setIndent(Row row, int indent) {
     indents[row.number()] = indent + 1;
     draft.drop(row.start(), row.content());
-    draft.insert(row.content(), " ".repeat(indent));
+    draft.indent(row.content(), indent);
   }
 
   /** Blank, or nothing but a comment. */

@@ -93,8 +93,7 @@ final class Shapes {
     char c = mending.draft.at(at);
     int next = mending.skipBlanks(at + 1);
     boolean begins = isItem(next) || wordKey(next, row.end());
-    boolean alone = "&*!".indexOf(c) >= 0 && mending.gap(at + 1);
-    if (!begins || !alone && "[]{}\"',%@`|>".indexOf(c) < 0) {
+    if (!begins || "[]{}\"',%@`|>&*!".indexOf(c) < 0) {
       return false;
     }
     boolean bracket = c == '[' || c == '{';
@@ -111,7 +110,7 @@ final class Shapes {
   /** True where the rest of a line is nothing but marks that belong to no word. */
   boolean onlyMarks(int at, int end) {
     for (int i = at; i < end; i++) {
-      if ("[]{}\"'`,:@%*|>".indexOf(mending.draft.at(i)) < 0) {
+      if ("[]{}\"'`,:@%*&!|>".indexOf(mending.draft.at(i)) < 0) {
         return false;
       }
     }

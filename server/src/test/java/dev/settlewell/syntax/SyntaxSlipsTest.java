@@ -131,6 +131,11 @@ class SyntaxSlipsTest {
             "{path: [{amplifier: {gain: 5, offset: 1}}, {r: 1}]}",
             "indent it below",
             "path:~  - amplifier:~      gain: 5~      offset: 1~  - r: 1"),
+        slip("a:~  b: 1~  ⟦!⟧c: 2", "{a: {b: 1, c: 2}}", "before a key", "a:~  b: 1~  c: 2"),
+        slip("a: ⟦&⟧~  - c: 2", "{a: [{c: 2}]}", "does not belong", "a: ~  - c: 2"),
+        slip("a:~  b: 1~⟦ \t ⟧⟦c⟧:~  - d: 2~  e: 3", "{a: {b: 1, c: [{d: 2}], e: 3}}", "tab", null),
+        slip("a: ⟦!⟧{b: 1, c: 2}", "{a: {b: 1, c: 2}}", "tag", "a: {b: 1, c: 2}"),
+        slip("a:~⟦-⟧x: 1~  y: 2", "{a: [{x: 1, y: 2}]}", "dash", "a:~- x: 1~  y: 2"),
         // Prose.
         slip(
             "about: ⟦Rev C: x⟧~b: 2",
