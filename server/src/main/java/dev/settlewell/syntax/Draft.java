@@ -2,6 +2,7 @@ package dev.settlewell.syntax;
 
 import dev.settlewell.text.Span;
 import java.util.Arrays;
+import java.util.Map;
 import java.util.TreeMap;
 
 /**
@@ -80,9 +81,11 @@ final class Draft {
     int[] ends = new int[chars.length + 64];
     int count = 0;
     int offset = 0;
+    Map.Entry<Integer, String> next = insertions.firstEntry();
     while (offset <= chars.length) {
-      String inserted = insertions.get(offset);
-      if (inserted != null) {
+      if (next != null && next.getKey() == offset) {
+        String inserted = next.getValue();
+        next = insertions.higherEntry(offset);
         int needed = count + inserted.length() + chars.length - offset + 1;
         if (needed > starts.length) {
           starts = Arrays.copyOf(starts, needed + 64);
