@@ -21,6 +21,7 @@ import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Random;
 import java.util.Set;
 import java.util.TreeMap;
 import java.util.regex.Matcher;
@@ -97,6 +98,49 @@ class WholeChainTest {
       findings(text.substring(0, length));
     }
     findings(text);
+  }
+
+  /** What slips in while somebody edits. */
+  private static final List<String> SLIPS =
+      List.of(
+          "0", "-", ":", "{", "]", "\n", "\t", "  ", "#", "'", "k", " ±", "1e30 ", "0 ", "~", "*x", "1000000",
+          "min", "ref", "- ", "to", "V", "Ω");
+
+  /** Lines doubled, exchanged, shifted; stretches lost; values made absurd: several at a time. */
+  @ParameterizedTest
+  @MethodSource("samples")
+  void damagedAtRandom(Path sample) {
+    String whole = read(sample);
+    int texts = 300 / stride(10);
+    for (int seed = 1; seed <= texts; seed++) {
+      Random random = new Random(seed * 0x9E3779B97F4A7C15L);
+      StringBuilder text = new StringBuilder(whole);
+      for (int edits = 1 + random.nextInt(4); edits > 0; edits--) {
+        damage(text, random);
+      }
+      findings(text.toString());
+    }
+  }
+
+  private static void damage(StringBuilder text, Random random) {
+    int at = random.nextInt(text.length());
+    int lineStart = text.lastIndexOf("\n", at) + 1;
+    int lineEnd = text.indexOf("\n", at) + 1;
+    switch (random.nextInt(5)) {
+      case 0 -> text.delete(at, Math.min(text.length(), at + 1 + random.nextInt(30)));
+      case 1 -> text.insert(at, SLIPS.get(random.nextInt(SLIPS.size())));
+      case 2 -> text.insert(lineStart, text.substring(lineStart, Math.max(lineStart, lineEnd)));
+      case 3 -> {
+        // A number becomes another one: nought, negative, huge.
+        Matcher number = Pattern.compile("\\d+(\\.\\d+)?").matcher(text);
+        if (number.find(at)) {
+          List<String> values = List.of("0", "-1", "1e-30", "1e30", "999999999", "0.5");
+          text.replace(
+              number.start(), number.end(), values.get(random.nextInt(values.size())));
+        }
+      }
+      default -> text.insert(lineStart, "  ");
+    }
   }
 
   /** A line that is gone costs its own channel and whoever is settled after it, no other. */
