@@ -116,12 +116,10 @@ public final class Analyzer {
       }
     }
     Map<String, PinRange> pins = new LinkedHashMap<>();
-    models.forEach(
-        (name, model) -> {
-          if (model.complete()) {
-            pins.put(name, PinRange.of(model));
-          }
-        });
+    for (ChannelModel model : List.copyOf(models.values())) {
+      pin(model).ifPresent(pin -> pins.put(model.name(), pin));
+    }
+    models.keySet().removeAll(faults.keySet());
     return new Neighbours(models, pins, othersLast);
   }
 
@@ -169,6 +167,16 @@ public final class Analyzer {
     }
   }
 
+  /** Empty where the model is not complete, or where its range is an internal fault. */
+  private Optional<PinRange> pin(ChannelModel model) {
+    try {
+      return model.complete() ? Optional.of(PinRange.of(model)) : Optional.empty();
+    } catch (RuntimeException e) {
+      faults.put(model.name(), "range: " + described(e));
+      return Optional.empty();
+    }
+  }
+
   private static String described(RuntimeException e) {
     StackTraceElement[] trace = e.getStackTrace();
     return e + (trace.length > 0 ? " at " + trace[0] : "");
@@ -205,11 +213,10 @@ public final class Analyzer {
         continue;
       }
       ChannelModel model = bind(channel, only);
+      PinRange pin = model == null ? null : pin(model).orElse(null);
       if (faults.containsKey(channel.name())) {
         unscanned.put(channel.name(), faulty(channel, Optional.empty(), only));
-      }
-      if (model != null) {
-        PinRange pin = model.complete() ? PinRange.of(model) : null;
+      } else if (model != null) {
         unscanned.put(channel.name(), new ChannelAnalysis(model, null, pin).run(Optional.empty()));
       }
     }

@@ -120,8 +120,13 @@ final class Parameters {
         .drift()
         .ifPresent(
             drift -> {
-              double scale = drift.unit().dimension() == Dimension.RATIO ? Math.abs(nominal) : 1;
-              add(Spread.of(row + "-drift", index, drift(drift, scale), Optional.empty(), places));
+              boolean share = drift.unit().dimension() == Dimension.RATIO;
+              double scale = share ? Math.abs(nominal) : 1;
+              Extent extent = drift(drift, scale);
+              // A share that would take the whole value away is a slip; what is left stays a value.
+              double most = share ? 0.9 * Math.max(0, scale - minus) : Double.POSITIVE_INFINITY;
+              Extent bounded = (x, ambient) -> Math.min(most, extent.at(x, ambient));
+              add(Spread.of(row + "-drift", index, bounded, Optional.empty(), places));
             });
   }
 

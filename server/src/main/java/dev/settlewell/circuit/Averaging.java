@@ -21,6 +21,9 @@ import org.apache.commons.math3.util.FastMath;
  * filters relative to its own rate only.
  */
 public final class Averaging {
+  /** Beyond so many samples doubles no longer tell a lobe's peak from its middle. */
+  private static final int MANY = 10_000_000;
+
   /** Multiples of the scan rate within which uneven visits are searched for their worst gain. */
   private static final int WIDEST_SEARCH = 8;
 
@@ -213,6 +216,10 @@ public final class Averaging {
     }
     if (2 * lobe + 1 > count) {
       return 1 - lobePeak(count - 1 - lobe, count);
+    }
+    if (count > MANY) {
+      // Where the lobes are far narrower than a sample they peak in their middle.
+      return (lobe + 0.5) / count;
     }
     // Below the middle the falling denominator pulls the peak towards the nearer integer.
     return new BrentSolver(1e-15, 1e-15)

@@ -145,6 +145,9 @@ public final class FrequencyResponse {
     double from = FastMath.log10(spectrum.low()) - 1;
     double to = FastMath.log10(spectrum.high()) + 4;
     double step = 1.0 / STEPS_A_DECADE;
+    if (gain(sourceOhms, chain, FastMath.pow(10, from)) <= half) {
+      return OptionalDouble.of(FastMath.pow(10, from));
+    }
     for (double at = from; at < to; at += step) {
       if (gain(sourceOhms, chain, FastMath.pow(10, at + step)) <= half) {
         double exponent =

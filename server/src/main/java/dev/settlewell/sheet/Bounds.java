@@ -2,6 +2,7 @@ package dev.settlewell.sheet;
 
 import dev.settlewell.unit.Dimension;
 import dev.settlewell.unit.Range;
+import dev.settlewell.unit.Tolerance;
 import dev.settlewell.unit.Toleranced;
 import dev.settlewell.unit.Unit;
 import dev.settlewell.vocabulary.Key;
@@ -20,6 +21,7 @@ final class Bounds {
     if (value instanceof Toleranced quantity) {
       Optional<String> fault = ofNumber(key, quantity.value(), quantity.unit().symbol());
       return fault
+          .or(() -> ofTolerance(key, quantity))
           .or(() -> ofTemperature(key, quantity.value(), quantity.unit()))
           .or(() -> ofRate(key, quantity.unit(), scope));
     }
@@ -50,6 +52,19 @@ final class Bounds {
           "`" + key.name() + "` takes " + String.join(", ", key.words()) + " and nothing else");
     }
     return Optional.empty();
+  }
+
+  /** A resistance of ±120 % would have no sign. */
+  private static Optional<String> ofTolerance(Key key, Toleranced quantity) {
+    double low = quantity.min().orElse(quantity.value());
+    for (Tolerance t : quantity.deviation().tolerances()) {
+      low -= t.minus() * (t.isShare() ? Math.abs(quantity.value()) : 1);
+    }
+    boolean fromZero = key.takes().least().filter(least -> least == 0).isPresent();
+    boolean gone = key.takes().positive() ? low <= 0 : fromZero && low < 0;
+    return gone
+        ? Optional.of("its tolerance takes `" + key.name() + "` to zero or below; it must be less")
+        : Optional.empty();
   }
 
   /** A count of which only some values exist, such as the wires of a thermometer. */

@@ -103,8 +103,8 @@ class WholeChainTest {
   /** What slips in while somebody edits. */
   private static final List<String> SLIPS =
       List.of(
-          "0", "-", ":", "{", "]", "\n", "\t", "  ", "#", "'", "k", " ±", "1e30 ", "0 ", "~", "*x", "1000000",
-          "min", "ref", "- ", "to", "V", "Ω");
+          "0", "-", ":", "{", "]", "\n", "\t", "  ", "#", "'", "k", " ±", "1e30 ", "0 ", "~", "*x",
+          "1000000", "min", "ref", "- ", "to", "V", "Ω");
 
   /** Lines doubled, exchanged, shifted; stretches lost; values made absurd: several at a time. */
   @ParameterizedTest

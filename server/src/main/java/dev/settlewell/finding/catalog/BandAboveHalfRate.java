@@ -29,11 +29,14 @@ final class BandAboveHalfRate extends ChannelCheck {
   void check(ChannelView channel, Consumer<Finding> report) {
     double band = channel.number("band");
     double rate = channel.number("result-rate-least");
-    if (!(rate <= 2 * band)) {
+    if (!(rate > 0 && rate <= 2 * band)) {
       return;
     }
     double factor = 2 * band / rate;
     double scanRate = channel.scanRate();
+    if (!Double.isFinite(factor * scanRate)) {
+      return;
+    }
     String above = Words.of(factor * scanRate, "Hz");
     report.accept(
         FindingBuilder.of(this, channel, "band")

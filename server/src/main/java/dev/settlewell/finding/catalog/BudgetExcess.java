@@ -20,7 +20,9 @@ final class BudgetExcess {
   }
 
   boolean exceeds() {
-    return budget.needs().isPresent() && budget.judged() > budget.needs().getAsDouble();
+    return !budget.rows().isEmpty()
+        && budget.needs().isPresent()
+        && budget.judged() > budget.needs().getAsDouble();
   }
 
   Finding finding(Check check, String what) {

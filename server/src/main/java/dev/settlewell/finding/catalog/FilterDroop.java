@@ -78,7 +78,7 @@ final class FilterDroop extends ChannelCheck {
     // The slowest corner within the tolerances is the one that has to come up.
     double slowest = corner(channel, channel.number("droop"));
     double needed = present * slowest / corner(channel, share);
-    if (!(needed < present)) {
+    if (!(0 < needed && needed < present)) {
       return Optional.empty();
     }
     String value = Words.part(PreferredValues.nextLower(Series.E6, needed), "F");

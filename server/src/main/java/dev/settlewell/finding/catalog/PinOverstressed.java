@@ -94,7 +94,7 @@ final class PinOverstressed extends ChannelCheck {
             .flatMap(stage -> stage.part().quantity("value").stated())
             .map(quantity -> quantity.value())
             .orElse(Double.NaN);
-    if (!(present + more > 0)) {
+    if (!(present + more > 0) || Double.isInfinite(more)) {
       return Optional.empty();
     }
     String part = Words.part(PreferredValues.nextHigher(Series.E24, present + more), "Ω");
