@@ -6,6 +6,8 @@ import dev.settlewell.review.FindingsSarif;
 import dev.settlewell.review.FindingsText;
 import dev.settlewell.review.Review;
 import dev.settlewell.review.Summary;
+import dev.settlewell.workspace.ProjectFile;
+import dev.settlewell.workspace.Workspace;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
@@ -43,9 +45,10 @@ final class CheckCommand implements Callable<Integer> {
   @Option(
       names = "--fail-on",
       paramLabel = "SEVERITY",
-      defaultValue = "warning",
       converter = FailLevel.Converter.class,
-      description = "error, warning, information, hint or never. Default: warning.")
+      description =
+          "error, warning, information, hint or never. Default: what .settlewell.yaml says, else"
+              + " warning.")
   private FailLevel failOn;
 
   @Option(
@@ -89,6 +92,11 @@ final class CheckCommand implements Callable<Integer> {
       review = sheets.withRemedies(review);
     }
     Output output = new Output(console);
+    ProjectFile project = sheets.project();
+    project.problems().forEach(p -> output.note(Workspace.PROJECT_FILE + ": " + p.message()));
+    if (failOn == null) {
+      failOn = FailLevel.of(project.failOn().orElse("warning"));
+    }
     review.failures().forEach(f -> output.note(f.path() + ": " + f.message()));
     output.result(render(review, output));
     return exitCode(review);

@@ -17,21 +17,23 @@ record FailLevel(Optional<Severity> severity) {
   private static final List<Severity> LEVELS =
       List.of(Severity.ERROR, Severity.WARNING, Severity.INFORMATION, Severity.HINT);
 
+  /**
+   * @param word one of {@link #WORDS}
+   */
+  static FailLevel of(String word) {
+    return new FailLevel(
+        LEVELS.stream().filter(severity -> severity.label().equals(word)).findFirst());
+  }
+
   /** Reads the word of an option. */
   static final class Converter implements CommandLine.ITypeConverter<FailLevel> {
     @Override
     public FailLevel convert(String word) {
-      if (word.equals(NEVER)) {
-        return new FailLevel(Optional.empty());
+      FailLevel level = of(word);
+      if (level.severity().isEmpty() && !word.equals(NEVER)) {
+        throw new CommandLine.TypeConversionException("'" + word + "' is none of: " + WORDS);
       }
-      return LEVELS.stream()
-          .filter(severity -> severity.label().equals(word))
-          .findFirst()
-          .map(severity -> new FailLevel(Optional.of(severity)))
-          .orElseThrow(
-              () ->
-                  new CommandLine.TypeConversionException(
-                      "'" + word + "' is none of: " + WORDS));
+      return level;
     }
   }
 }

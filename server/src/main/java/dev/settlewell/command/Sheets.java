@@ -14,6 +14,7 @@ import dev.settlewell.workspace.Discovery;
 import dev.settlewell.workspace.DiskReader;
 import dev.settlewell.workspace.Memo;
 import dev.settlewell.workspace.Overlay;
+import dev.settlewell.workspace.ProjectFile;
 import dev.settlewell.workspace.SheetReader;
 import dev.settlewell.workspace.Workspace;
 import java.io.IOException;
@@ -43,6 +44,11 @@ final class Sheets {
   Sheets(Console console, LocalDate date) {
     this.console = console;
     this.date = date;
+  }
+
+  /** The settings of the project that the tool was started in. */
+  ProjectFile project() {
+    return ProjectFile.above("", reader());
   }
 
   /**
@@ -82,10 +88,7 @@ final class Sheets {
 
   List<Fix> offered(Reviewed sheet, Finding finding) {
     return Remedies.offered(
-        sheet.text(),
-        finding,
-        sheet.findings(),
-        content -> with(sheet.path(), content).findings());
+        sheet.text(), finding, sheet.findings(), content -> with(sheet.path(), content).findings());
   }
 
   /** The sheet as it would be with another text; what it uses stays as it is. */

@@ -4,6 +4,7 @@ import dev.settlewell.assist.Checked;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.text.SourceText;
 import dev.settlewell.vocabulary.Vocabulary;
+import dev.settlewell.workspace.ProjectFile;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -24,4 +25,7 @@ interface Desk {
 
   /** The sheets on disk below a folder that is marked as a workspace; none below any other. */
   List<String> sheetsBelow(String folder);
+
+  /** The settings of the project that a folder belongs to. */
+  ProjectFile project(String folder);
 }

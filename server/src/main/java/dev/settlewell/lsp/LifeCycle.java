@@ -36,18 +36,24 @@ final class LifeCycle {
   }
 
   private InitializeResult initialize(InitializeParams params) {
-    Abilities abilities =
-        Abilities.of(params.getCapabilities(), params.getInitializationOptions());
+    Abilities abilities = Abilities.of(params.getCapabilities(), params.getInitializationOptions());
+    List<String> folders = folders(params);
+    Settings project = folders.isEmpty() ? Settings.DEFAULT : ofProject(folders.get(0));
     Settings settings =
         params.getInitializationOptions() instanceof JsonElement options
-            ? Settings.DEFAULT.with(options)
-            : Settings.DEFAULT;
-    List<String> folders = folders(params);
+            ? project.with(options)
+            : project;
     session.change(view -> view.with(abilities).with(settings).withFolders(folders));
     if (params.getProcessId() != null) {
       watch(params.getProcessId());
     }
     return new InitializeResult(capabilities(abilities), new ServerInfo("settlewell", version));
+  }
+
+  /** What the project's file says; the editor's own settings come after it. */
+  private Settings ofProject(String folder) {
+    return Settings.DEFAULT.withDocumentation(
+        session.view().desk().project(folder).documentation().orElse(""));
   }
 
   /** Folders where the client has them, else the one root of older clients. */

@@ -21,6 +21,10 @@ record Settings(
   static final String SECTION = "settlewell";
   static final Settings DEFAULT = new Settings("", true, true, true, true, true);
 
+  Settings withDocumentation(String url) {
+    return new Settings(url, unopenedSheets, codeLens, hintResolution, hintAcquisition, hintValues);
+  }
+
   /**
    * Reads what a client sends: the section itself or an object that holds it. Neovim sends an empty
    * array where nothing is set, others null or strings; whatever is not understood keeps its value.
@@ -48,8 +52,7 @@ record Settings(
 
   private static Optional<Boolean> flag(JsonObject object, String key) {
     JsonElement value = object.get(key);
-    boolean is =
-        value != null && value.isJsonPrimitive() && value.getAsJsonPrimitive().isBoolean();
+    boolean is = value != null && value.isJsonPrimitive() && value.getAsJsonPrimitive().isBoolean();
     return is ? Optional.of(value.getAsBoolean()) : Optional.empty();
   }
 

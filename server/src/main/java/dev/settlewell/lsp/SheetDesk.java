@@ -10,6 +10,7 @@ import dev.settlewell.vocabulary.Vocabulary;
 import dev.settlewell.workspace.Discovery;
 import dev.settlewell.workspace.Memo;
 import dev.settlewell.workspace.Overlay;
+import dev.settlewell.workspace.ProjectFile;
 import dev.settlewell.workspace.SheetReader;
 import dev.settlewell.workspace.Workspace;
 import java.nio.file.InvalidPathException;
@@ -108,5 +109,10 @@ final class SheetDesk implements Desk {
     } catch (InvalidPathException elsewhere) {
       return List.of();
     }
+  }
+
+  @Override
+  public ProjectFile project(String folder) {
+    return ProjectFile.above(folder, files);
   }
 }

@@ -18,6 +18,7 @@ import org.eclipse.lsp4j.jsonrpc.messages.Either;
 /** Folders, files on disk and settings: what changes beside the open documents. */
 final class WorkspaceSync {
   private static final String WATCH = "workspace/didChangeWatchedFiles";
+
   /** Sheets, what marks a workspace, and the sources that firmware constants stand in. */
   private static final List<String> WATCHED =
       List.of("**/*.channels.yaml", "**/.settlewell.yaml", "**/*.{h,hh,hpp,hxx,c,cc,cpp,cxx,ino}");
@@ -105,7 +106,10 @@ final class WorkspaceSync {
     if (session.view().abilities().configuration()) {
       askForSettings();
     } else if (params.getSettings() instanceof JsonElement json) {
-      session.change(view -> view.with(Settings.DEFAULT.with(json)));
+      session.change(
+          view ->
+              view.with(
+                  Settings.DEFAULT.withDocumentation(view.settings().documentation()).with(json)));
       lookAgain();
     }
   }

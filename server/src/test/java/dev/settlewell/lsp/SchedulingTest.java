@@ -6,6 +6,7 @@ import dev.settlewell.assist.Checked;
 import dev.settlewell.finding.Finding;
 import dev.settlewell.text.SourceText;
 import dev.settlewell.vocabulary.Vocabulary;
+import dev.settlewell.workspace.ProjectFile;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -48,6 +49,11 @@ class SchedulingTest {
     public List<String> sheetsBelow(String folder) {
       return List.of();
     }
+
+    @Override
+    public ProjectFile project(String folder) {
+      return ProjectFile.NONE;
+    }
   }
 
   private final SlowDesk desk = new SlowDesk();
@@ -68,8 +74,7 @@ class SchedulingTest {
   private int hover(FakeClient client) {
     return client.request(
         "textDocument/hover",
-        Map.of(
-            "textDocument", Map.of("uri", URI), "position", Map.of("line", 0, "character", 0)));
+        Map.of("textDocument", Map.of("uri", URI), "position", Map.of("line", 0, "character", 0)));
   }
 
   @Test

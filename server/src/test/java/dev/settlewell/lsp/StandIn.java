@@ -11,6 +11,7 @@ import dev.settlewell.syntax.SyntaxTree;
 import dev.settlewell.text.Related;
 import dev.settlewell.text.SourceText;
 import dev.settlewell.vocabulary.Vocabulary;
+import dev.settlewell.workspace.ProjectFile;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
@@ -46,6 +47,11 @@ final class StandIn implements Desk {
     return List.of();
   }
 
+  @Override
+  public ProjectFile project(String folder) {
+    return ProjectFile.NONE;
+  }
+
   private static Checked check(SourceText text) {
     if (text.content().contains("CRASH")) {
       throw new IllegalStateException("a planted mistake");
@@ -58,7 +64,9 @@ final class StandIn implements Desk {
 
   private static void find(
       SourceText text, String word, String name, Severity severity, List<Finding> findings) {
-    for (int at = text.content().indexOf(word); at >= 0; at = text.content().indexOf(word, at + 1)) {
+    for (int at = text.content().indexOf(word);
+        at >= 0;
+        at = text.content().indexOf(word, at + 1)) {
       Related related = new Related(text.place(0, 1), "the beginning");
       findings.add(
           new Finding(
