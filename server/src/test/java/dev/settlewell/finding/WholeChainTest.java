@@ -219,6 +219,10 @@ class WholeChainTest {
     Set<String> touched = new LinkedHashSet<>();
     String own = owners.get(line);
     touched.add(own);
+    if (lines.get(line - 1).startsWith("channels:")) {
+      // Without the first key its lines set the depth of all entries, and the others are too far out.
+      touched.addAll(owners.values());
+    }
     if (lines.get(line).startsWith("  " + own + ":")) {
       owners.forEach(
           (at, name) -> {
