@@ -255,6 +255,11 @@ final class BlockScan {
   }
 
   private void child(Row row, Level parent) {
+    int named = firstNamed(row, parent);
+    if (named > 0) {
+      takeOutNameless(row, named);
+      return;
+    }
     int at = row.content();
     boolean item = shapes.isItem(at) || shapes.tightItem(at, row.end());
     if (!item && shapes.isText(row) && (shapes.opens(at) || !keysFollow(row))) {
@@ -272,6 +277,56 @@ final class BlockScan {
     } else {
       entry(row, level);
     }
+  }
+
+  /**
+   * The line on which the block under a key really begins, where the first lines under it stand as
+   * deep as what is below the names that follow: the line that named them is gone. Negative where
+   * nothing like that is so. One name alone in another column may as well be the one that slipped;
+   * two of them, each with lines of its own below, are not.
+   */
+  private int firstNamed(Row row, Level parent) {
+    int first = -1;
+    int column = -1;
+    int names = 0;
+    int next = row.number();
+    while ((next = mending.nextContent(next)) >= 0) {
+      Row below = mending.row(next);
+      if (below.indent() <= parent.indent) {
+        break;
+      }
+      if (below.indent() >= row.indent() || column >= 0 && below.indent() != column) {
+        continue;
+      }
+      int under = mending.nextContent(next);
+      if (!opensBlock(below) || under < 0 || mending.row(under).indent() != row.indent()) {
+        return -1;
+      }
+      first = first < 0 ? next : first;
+      column = below.indent();
+      names++;
+    }
+    return names > 1 ? first : -1;
+  }
+
+  /** A key with nothing behind its colon. */
+  private boolean opensBlock(Row row) {
+    String written = mending.slice(row.content(), row.end()).replaceAll("\\s#.*", "").strip();
+    return written.endsWith(":");
+  }
+
+  /** What no line names costs itself; the names behind it are read. */
+  private void takeOutNameless(Row row, int named) {
+    mending.syntax(
+        row.content(),
+        row.end(),
+        "the line that names this is missing: write `name:` above it, in the column of the names"
+            + " that follow");
+    for (int line = row.number(); line < named; line++) {
+      Row lost = mending.row(line);
+      mending.draft.blank(lost.start(), Math.max(lost.start(), lost.end()));
+    }
+    mending.line = named - 1;
   }
 
   /** True where a line that looks like a text has keys beside or below it: its colon is missing. */
