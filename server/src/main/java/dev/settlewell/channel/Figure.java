@@ -70,8 +70,12 @@ public record Figure(
     operands = List.copyOf(operands);
   }
 
+  /** A value that is no number (nothing limits it, or the sheet's values are absurd) is none. */
   public static Figure of(
       String name, double value, String unit, String formula, Operand... operands) {
+    if (!Double.isFinite(value)) {
+      return none(name, unit, "beyond what a number holds; look at the values it is made of");
+    }
     return new Figure(
         name, new State.Value(value), unit, OptionalDouble.empty(), formula, List.of(operands));
   }
