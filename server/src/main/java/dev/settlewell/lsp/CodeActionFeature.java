@@ -32,8 +32,7 @@ final class CodeActionFeature implements Feature {
             List.of(CodeActionKind.QuickFix, CodeActionKind.RefactorExtract, FIX_ALL)));
   }
 
-  private static List<CodeAction> answer(
-      CodeActionParams params, View view, CancelChecker cancel) {
+  private static List<CodeAction> answer(CodeActionParams params, View view, CancelChecker cancel) {
     Optional<Checked> checked = view.checked(params.getTextDocument().getUri());
     if (checked.isEmpty() || !view.abilities().codeActionLiterals()) {
       return List.of();
@@ -56,7 +55,9 @@ final class CodeActionFeature implements Feature {
     return CodeActions.at(sheet, view.vocabulary(), range, trial);
   }
 
-  /** A kind asks for itself and for everything below it: {@code source} for {@code source.fixAll}. */
+  /**
+   * A kind asks for itself and for everything below it: {@code source} for {@code source.fixAll}.
+   */
   private static boolean wanted(Action action, List<String> only) {
     String kind = kind(action.sort());
     return only == null
@@ -71,9 +72,19 @@ final class CodeActionFeature implements Feature {
     };
   }
 
+  private static boolean isCertain(Action action) {
+    return action.finding().stream()
+        .flatMap(finding -> finding.fixes().stream())
+        .anyMatch(fix -> fix.safe() && fix.title().equals(action.title()));
+  }
+
   private static CodeAction action(Action action, Checked sheet, View view) {
     CodeAction mapped = new CodeAction(action.title());
     mapped.setKind(kind(action.sort()));
+    if (isCertain(action)) {
+      // What an editor's "mend it for me" may take without asking: it changes no value.
+      mapped.setIsPreferred(true);
+    }
     mapped.setEdit(new Edits(view).add(sheet.text(), action.edits()).all());
     action
         .finding()
