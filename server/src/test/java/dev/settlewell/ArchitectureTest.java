@@ -2,8 +2,8 @@ package dev.settlewell;
 
 import static com.tngtech.archunit.base.DescribedPredicate.describe;
 import static com.tngtech.archunit.base.DescribedPredicate.not;
-import static com.tngtech.archunit.core.domain.JavaClass.Predicates.resideInAnyPackage;
 import static com.tngtech.archunit.core.domain.JavaClass.Predicates.resideInAPackage;
+import static com.tngtech.archunit.core.domain.JavaClass.Predicates.resideInAnyPackage;
 import static com.tngtech.archunit.lang.syntax.ArchRuleDefinition.noClasses;
 import static org.assertj.core.api.Assertions.assertThat;
 
@@ -35,8 +35,8 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /**
- * Keeps the map of the packages in DEVELOPERS.md true: what is below knows nothing of what is above,
- * and each outside thing has the few packages that may touch it.
+ * Keeps the map of the packages in DEVELOPERS.md true: what is below knows nothing of what is
+ * above, and each outside thing has the few packages that may touch it.
  */
 class ArchitectureTest {
   /** From the top floor down; those on one floor know nothing of each other. */

@@ -30,7 +30,8 @@ public final class HeldAgainst {
 
   private static String read(String resource) {
     try (InputStream in = HeldAgainst.class.getResourceAsStream(resource)) {
-      return new String(Objects.requireNonNull(in, resource).readAllBytes(), StandardCharsets.UTF_8);
+      return new String(
+          Objects.requireNonNull(in, resource).readAllBytes(), StandardCharsets.UTF_8);
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }

@@ -84,8 +84,7 @@ class LauncherIT {
       Files.createSymbolicLink(tools.resolve(tool), Path.of("/usr/bin/" + tool));
     }
     Ended ended =
-        start(
-            Map.of("JAVA_HOME", folder + "/old", "PATH", tools.toString()), copy.toString());
+        start(Map.of("JAVA_HOME", folder + "/old", "PATH", tools.toString()), copy.toString());
     assertThat(ended.code()).isEqualTo(2);
     assertThat(ended.err())
         .isEqualTo(

@@ -41,15 +41,11 @@ public final class CodeActions {
    *     offered only once that shows that they help
    */
   public static List<Action> at(
-      Checked checked,
-      Vocabulary vocabulary,
-      Span range,
-      Function<String, List<Finding>> analyse) {
+      Checked checked, Vocabulary vocabulary, Span range, Function<String, List<Finding>> analyse) {
     List<Action> actions = new ArrayList<>();
     for (Finding finding : here(checked, range)) {
       for (Fix fix : Remedies.offered(checked.text(), finding, checked.findings(), analyse)) {
-        actions.add(
-            new Action(fix.title(), Sort.QUICK_FIX, fix.edits(), Optional.of(finding)));
+        actions.add(new Action(fix.title(), Sort.QUICK_FIX, fix.edits(), Optional.of(finding)));
       }
     }
     for (Finding finding : here(checked, range)) {
@@ -137,8 +133,7 @@ public final class CodeActions {
     return Optional.empty();
   }
 
-  private static Optional<Edit> acceptance(
-      SourceText text, Node.Mapping mapping, Finding finding) {
+  private static Optional<Edit> acceptance(SourceText text, Node.Mapping mapping, Finding finding) {
     if (mapping.entries().isEmpty()) {
       return Optional.empty();
     }
@@ -163,13 +158,7 @@ public final class CodeActions {
   private static String entry(Finding finding, int column) {
     String inner = "\n" + " ".repeat(column + 2);
     String about = finding.about().isEmpty() ? "" : inner + "about: " + finding.about();
-    return "\n"
-        + " ".repeat(column)
-        + "- finding: "
-        + finding.name()
-        + about
-        + inner
-        + "because: ";
+    return "\n" + " ".repeat(column) + "- finding: " + finding.name() + about + inner + "because: ";
   }
 
   private static int column(SourceText text, int offset) {
@@ -183,7 +172,6 @@ public final class CodeActions {
       end--;
     }
     int lineEnd = text.line(text.lineAt(end)).end();
-    return new Edit(
-        text.place(lineEnd, lineEnd), lines.replace("\n", text.lineBreak()));
+    return new Edit(text.place(lineEnd, lineEnd), lines.replace("\n", text.lineBreak()));
   }
 }

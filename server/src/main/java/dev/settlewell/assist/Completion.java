@@ -1,7 +1,7 @@
 package dev.settlewell.assist;
 
-import dev.settlewell.finding.catalog.Catalog;
 import dev.settlewell.finding.Check;
+import dev.settlewell.finding.catalog.Catalog;
 import dev.settlewell.syntax.Cursor;
 import dev.settlewell.syntax.Node;
 import dev.settlewell.text.Edit;
@@ -101,7 +101,8 @@ public final class Completion {
   private void newKey(Cursor.NewKey at) {
     span = at.word();
     boolean misplaced =
-        !at.flow() && !checked.text().slice(at.lead()).equals(" ".repeat(at.indent()))
+        !at.flow()
+            && !checked.text().slice(at.lead()).equals(" ".repeat(at.indent()))
             && checked.text().slice(at.lead()).isBlank();
     also =
         misplaced
@@ -157,9 +158,7 @@ public final class Completion {
                 || inside instanceof Meaning.Items items && isBlockList(items.key()));
     String dash = inside instanceof Meaning.Items ? "- " : "";
     return new Template(
-        block
-            ? key.name() + ":\n" + " ".repeat(indent + STEP) + dash
-            : key.name() + ": ");
+        block ? key.name() + ":\n" + " ".repeat(indent + STEP) + dash : key.name() + ": ");
   }
 
   private boolean isBlockList(Key list) {
@@ -186,7 +185,11 @@ public final class Completion {
         .ifPresent(
             skeleton ->
                 add(
-                    "new " + key.names().flatMap(Key.MapNames::nameKind).map(NameKind::word).orElse("entry"),
+                    "new "
+                        + key.names()
+                            .flatMap(Key.MapNames::nameKind)
+                            .map(NameKind::word)
+                            .orElse("entry"),
                     Sort.KIND,
                     "",
                     new Prose().paragraph(key.doc()),
@@ -257,8 +260,14 @@ public final class Completion {
       proposals.set(
           i,
           new Proposal(
-              p.label(), p.sort(), p.detail(), p.doc(), p.span(), "- " + p.text(),
-              p.snippet().map(snippet -> "- " + snippet), p.also()));
+              p.label(),
+              p.sort(),
+              p.detail(),
+              p.doc(),
+              p.span(),
+              "- " + p.text(),
+              p.snippet().map(snippet -> "- " + snippet),
+              p.also()));
     }
   }
 
@@ -270,7 +279,10 @@ public final class Completion {
     } else if (meaning instanceof Meaning.Kinds kinds) {
       kinds(kinds.key()).forEach(kind -> kind(kind, braced(kind)));
     } else if (meaning instanceof Meaning.Items items) {
-      items.key().examples().forEach(e -> add(e, Sort.VALUE, "example", new Prose(), new Template(e)));
+      items
+          .key()
+          .examples()
+          .forEach(e -> add(e, Sort.VALUE, "example", new Prose(), new Template(e)));
     }
   }
 
@@ -281,8 +293,7 @@ public final class Completion {
       return;
     }
     String typed = checked.text().slice(span);
-    for (ValueProposals.Choice choice :
-        new ValueProposals(checked, key, path, typed).choices()) {
+    for (ValueProposals.Choice choice : new ValueProposals(checked, key, path, typed).choices()) {
       Prose doc = new Prose().paragraph(key.doc());
       add(
           choice.text(),

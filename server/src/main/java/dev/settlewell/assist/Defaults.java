@@ -11,7 +11,9 @@ import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
-/** Moves the errors of one component into {@code defaults}, where they hold for all that lack some. */
+/**
+ * Moves the errors of one component into {@code defaults}, where they hold for all that lack some.
+ */
 final class Defaults {
   private static final Pattern WITH_ERRORS = Pattern.compile("(.*?\\S)(\\s*)((?:±|\\+-|\\+/-).*)");
 
@@ -30,8 +32,7 @@ final class Defaults {
     }
     Span whole = scalar.place().span();
     int start = whole.start() + scalar.inset();
-    Edit removal =
-        new Edit(checked.text().place(start + parts.end(1), start + parts.end(3)), "");
+    Edit removal = new Edit(checked.text().place(start + parts.end(1), start + parts.end(3)), "");
     return insertion(checked, root, component.get(), parts.group(3))
         .map(
             insertion ->
@@ -48,8 +49,7 @@ final class Defaults {
         piece.kind().isPresent()
             ? piece.kind().flatMap(kind -> kind.shortKey().flatMap(kind::key))
             : piece.key();
-    return key.flatMap(Key::errorsFrom)
-        .filter(name -> piece.nameAround("channel").isPresent());
+    return key.flatMap(Key::errorsFrom).filter(name -> piece.nameAround("channel").isPresent());
   }
 
   /** Empty where the sheet has such a default already: two answers to one question. */

@@ -35,9 +35,7 @@ final class FigureWords {
   static Optional<String> value(Figure figure, String measuredUnit) {
     if (figure.state() instanceof Figure.State.Value value) {
       String at =
-          figure.at().isPresent()
-              ? " at " + point(figure.at().getAsDouble(), measuredUnit)
-              : "";
+          figure.at().isPresent() ? " at " + point(figure.at().getAsDouble(), measuredUnit) : "";
       return Optional.of(number(figure.name(), value.value(), figure.unit()) + at);
     }
     if (figure.state() instanceof Figure.State.Missing missing) {
@@ -45,8 +43,11 @@ final class FigureWords {
           String.join(
               ", ",
               missing.inputs().stream()
-                  .map(input -> "`" + input.pointer().substring(input.pointer().lastIndexOf('/') + 1)
-                      + "`")
+                  .map(
+                      input ->
+                          "`"
+                              + input.pointer().substring(input.pointer().lastIndexOf('/') + 1)
+                              + "`")
                   .distinct()
                   .toList());
       return Optional.of("not computed, lacks " + inputs);

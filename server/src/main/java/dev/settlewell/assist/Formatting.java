@@ -60,7 +60,8 @@ public final class Formatting {
     boolean word = scalar.text().matches("[a-z][a-z0-9-]*");
     boolean wrong =
         checked.findings().stream()
-            .anyMatch(f -> f.place().span().overlaps(scalar.place().span()) && !f.fixes().isEmpty());
+            .anyMatch(
+                f -> f.place().span().overlaps(scalar.place().span()) && !f.fixes().isEmpty());
     if (form.isEmpty() || word || wrong) {
       return;
     }

@@ -43,8 +43,7 @@ public final class Hover {
 
   private Optional<Told> of(Piece piece, int offset) {
     boolean onLabel = piece.isOnLabel(offset);
-    Span span =
-        onLabel ? piece.label().orElseThrow().place().span() : piece.value().place().span();
+    Span span = onLabel ? piece.label().orElseThrow().place().span() : piece.value().place().span();
     if (onLabel) {
       label(piece);
     } else {
@@ -78,7 +77,8 @@ public final class Hover {
     if (!key.computed()) {
       prose.paragraph("Read, and not computed with yet.");
     }
-    key.standard().ifPresent(standard -> prose.paragraph("Where it is missing: `" + standard + "`"));
+    key.standard()
+        .ifPresent(standard -> prose.paragraph("Where it is missing: `" + standard + "`"));
     if (!key.examples().isEmpty()) {
       prose.paragraph("Example: `" + key.examples().get(0) + "`");
     }
@@ -245,7 +245,10 @@ public final class Hover {
 
   private void finding(Finding finding) {
     String how =
-        finding.acceptance().map(a -> "accepted: " + a.because()).orElse(finding.severity().label());
+        finding
+            .acceptance()
+            .map(a -> "accepted: " + a.because())
+            .orElse(finding.severity().label());
     prose.heading("`" + finding.name() + "` (" + how + ")").paragraph(finding.message());
     finding.facts().forEach(fact -> prose.item(fact.label() + ": " + fact.text()));
     Pages.of(finding.name()).map(Pages.Page::summary).ifPresent(prose::paragraph);

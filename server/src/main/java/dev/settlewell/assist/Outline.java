@@ -101,8 +101,7 @@ public final class Outline {
               Optional.empty(),
               kind,
               Optional.of(piece));
-      kind.ifPresentOrElse(
-          k -> part(stage, k, entry.value()), () -> unknown(stage, entry.value()));
+      kind.ifPresentOrElse(k -> part(stage, k, entry.value()), () -> unknown(stage, entry.value()));
     }
   }
 
@@ -122,8 +121,7 @@ public final class Outline {
     } else if (value instanceof Node.Mapping mapping && !key.entries().isEmpty()) {
       Optional<Kind> kind = key.item().flatMap(this::kindOf);
       for (Node.Entry entry : mapping.entries()) {
-        entry(
-            Piece.Role.NAME, entry, kind.flatMap(k -> k.key(key.entries().get(1))), piece);
+        entry(Piece.Role.NAME, entry, kind.flatMap(k -> k.key(key.entries().get(1))), piece);
       }
     } else if (value instanceof Node.Mapping mapping) {
       unknown(piece, mapping);

@@ -45,8 +45,10 @@ final class Readings {
   private static void toleranced(Toleranced value, List<String> lines) {
     String symbol = value.unit().symbol();
     String amplitude =
-        value.amplitude().map(a -> " " + a.name().toLowerCase(java.util.Locale.ROOT)
-            .replace('_', '-')).orElse(" ");
+        value
+            .amplitude()
+            .map(a -> " " + a.name().toLowerCase(java.util.Locale.ROOT).replace('_', '-'))
+            .orElse(" ");
     lines.add(
         (number(value.value(), symbol) + value.of().map(of -> " of " + of).orElse("") + amplitude)
             .strip());
@@ -95,9 +97,7 @@ final class Readings {
                           + Engineering.digits(basis.k(), 3))
               .orElse("a hard limit (rectangular distribution)"));
     }
-    deviation
-        .at()
-        .ifPresent(at -> lines.add("holds at " + number(at.value(), at.unit().symbol())));
+    deviation.at().ifPresent(at -> lines.add("holds at " + number(at.value(), at.unit().symbol())));
   }
 
   private static String tolerance(Tolerance tolerance) {

@@ -18,8 +18,7 @@ final class RelatedFigures {
           Map.entry(
               "settle-within",
               List.of("settling-error-lsb", "settling-error-measured", "required-acquisition")),
-          Map.entry(
-              "measures", List.of("code-low", "code-high", "range-used", "lsb-measured")),
+          Map.entry("measures", List.of("code-low", "code-high", "range-used", "lsb-measured")),
           Map.entry("resolution", List.of("lsb-measured", "noise-measured", "effective-bits")),
           Map.entry("band", List.of("droop", "corner-frequency", "result-rate")),
           Map.entry("average", List.of("result-rate", "noise-lsb", "effective-bits")),
@@ -44,8 +43,7 @@ final class RelatedFigures {
               List.of("source-resistance", "largest-source-resistance", "corner-frequency")),
           Map.entry(
               "divider",
-              List.of(
-                  "source-resistance", "largest-source-resistance", "pin-low", "pin-high")));
+              List.of("source-resistance", "largest-source-resistance", "pin-low", "pin-high")));
 
   private RelatedFigures() {}
 

@@ -22,7 +22,8 @@ final class Skeletons {
             path:
               - resistor: <5:1 kΩ ±1 %>
               - capacitor: <6:100 nF>
-            acquisition: <7:12 cycles>""",
+            acquisition: <7:12 cycles>\
+          """,
           "converters",
           """
           <1:adc>:
@@ -32,13 +33,15 @@ final class Skeletons {
             clock: <5:8 MHz ±1 %>
             conversion-cycles: <6:14>
             hold-capacitor: <7:{typical: 5 pF, max: 7 pF}>
-            switch-resistance: <8:{max: 1.5 kΩ}>""",
+            switch-resistance: <8:{max: 1.5 kΩ}>\
+          """,
           "scans",
           """
           <1:name>:
             converter: <2:adc>
             rate: <3:100 Hz>
-            order: [<4:channel>]""",
+            order: [<4:channel>]\
+          """,
           "interferers",
           "<1:mains>: {frequency: <2:50 Hz ±1 %>, amplitude: <3:5 mV>}",
           "supplies",
@@ -50,7 +53,9 @@ final class Skeletons {
     return Optional.ofNullable(OF_NAMES.get(section)).map(Template::new);
   }
 
-  /** A sensor or stage as its first example in the vocabulary writes it, its values to be filled. */
+  /**
+   * A sensor or stage as its first example in the vocabulary writes it, its values to be filled.
+   */
   static Template kind(Kind kind) {
     String example =
         kind.examples().stream()

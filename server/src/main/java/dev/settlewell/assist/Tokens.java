@@ -43,9 +43,7 @@ public final class Tokens {
       all.add(comment.place().span(), Sort.COMMENT, false);
     }
     all.tokens.sort(Comparator.comparingInt(token -> token.span().start()));
-    return all.tokens.stream()
-        .filter(token -> isOneLine(checked, token.span()))
-        .toList();
+    return all.tokens.stream().filter(token -> isOneLine(checked, token.span())).toList();
   }
 
   private static boolean isOneLine(Checked checked, Span span) {

@@ -5,9 +5,9 @@ import dev.settlewell.sheet.Named;
 import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Slot;
 import dev.settlewell.unit.Engineering;
+import dev.settlewell.unit.Expected;
 import dev.settlewell.unit.PreferredValues;
 import dev.settlewell.unit.PreferredValues.Series;
-import dev.settlewell.unit.Expected;
 import dev.settlewell.unit.Toleranced;
 import dev.settlewell.unit.Values;
 import dev.settlewell.vocabulary.Key;
@@ -27,7 +27,8 @@ final class ValueProposals {
   /** One whole value. */
   record Choice(String text, String detail, boolean isName) {}
 
-  private static final Pattern NUMBER = Pattern.compile("([+-]?[0-9]+(?:\\.[0-9]+)?)\\s*(\\S*)\\s*");
+  private static final Pattern NUMBER =
+      Pattern.compile("([+-]?[0-9]+(?:\\.[0-9]+)?)\\s*(\\S*)\\s*");
   private static final Pattern ERRORS = Pattern.compile("(.*?)\\s*((?:±|\\+-|\\+/-).*)?");
 
   private final Checked checked;
@@ -94,7 +95,8 @@ final class ValueProposals {
       if (needed.isPresent() && cycles < needed.getAsDouble()) {
         tooShort.add(new Choice(text, "too short: needs " + need(needed.getAsDouble()), false));
       } else {
-        String why = needed.isPresent() ? "settles: needs " + need(needed.getAsDouble()) : "offered";
+        String why =
+            needed.isPresent() ? "settles: needs " + need(needed.getAsDouble()) : "offered";
         choices.add(new Choice(text, why, false));
       }
     }

@@ -9,8 +9,8 @@ import org.apache.commons.math3.analysis.solvers.BrentSolver;
  *
  * <p>The caller gives the magnitude of the error as a function of the value, worst case over the
  * tolerances included. Neither function needs it monotone: values are walked in steps of an octave
- * from the side where the error is expected to be small, and the first value that does
- * not suffice ends the walk, so that everything between that side and the answer suffices.
+ * from the side where the error is expected to be small, and the first value that does not suffice
+ * ends the walk, so that everything between that side and the answer suffices.
  */
 public final class Remedies {
   private static final double STEP_RATIO = 2;

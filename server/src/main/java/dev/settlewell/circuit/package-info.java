@@ -5,9 +5,8 @@
  * dev.settlewell.circuit.Ladder}; {@link dev.settlewell.circuit.Settling} samples it.
  *
  * <p>{@link dev.settlewell.circuit.FrequencyResponse} and {@link dev.settlewell.circuit.Noise} take
- * the whole path; {@link dev.settlewell.circuit.Averaging}, {@link
- * dev.settlewell.circuit.Aliasing} and {@link dev.settlewell.circuit.Lines} say what sampling makes
- * of what comes through.
+ * the whole path; {@link dev.settlewell.circuit.Averaging}, {@link dev.settlewell.circuit.Aliasing}
+ * and {@link dev.settlewell.circuit.Lines} say what sampling makes of what comes through.
  *
  * <p>Everything here is in SI units and knows nothing of sheets, files or units of measure.
  */

@@ -37,7 +37,10 @@ final class ExplainCommand implements Callable<Integer> {
     }
     if (!Catalog.NAMES.contains(name)) {
       throw new InputException(
-          "no finding " + name + nearest(name, Catalog.NAMES) + " (`settlewell explain` lists all)");
+          "no finding "
+              + name
+              + nearest(name, Catalog.NAMES)
+              + " (`settlewell explain` lists all)");
     }
     Pages.Page page =
         Pages.of(name).orElseThrow(() -> new InputException("there is no page of " + name));

@@ -16,9 +16,7 @@ final class Output {
     this.console = console;
   }
 
-  /**
-   * Writes results. A reader that has seen enough ({@code | head}) is no error; a full disk is.
-   */
+  /** Writes results. A reader that has seen enough ({@code | head}) is no error; a full disk is. */
   void result(String text) throws InputException {
     try {
       write(console.out(), text);
@@ -62,7 +60,9 @@ final class Output {
         true);
   }
 
-  /** NO_COLOR and FORCE_COLOR count where they are set and not empty, the first before the second. */
+  /**
+   * NO_COLOR and FORCE_COLOR count where they are set and not empty, the first before the second.
+   */
   static boolean coloured(Console console) {
     if (!console.environment().getOrDefault("NO_COLOR", "").isEmpty()) {
       return false;

@@ -45,7 +45,9 @@ public final class Remedies {
         && fix.edits().stream().allMatch(edit -> edit.place().sheet().equals(text.name()));
   }
 
-  /** An acceptance that falls idle with the finding it held back is no reason against mending it. */
+  /**
+   * An acceptance that falls idle with the finding it held back is no reason against mending it.
+   */
   private static boolean helps(Finding finding, List<Finding> before, List<Finding> after) {
     return after.stream().noneMatch(finding::sameAs)
         && after.stream()

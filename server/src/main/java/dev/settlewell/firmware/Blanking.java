@@ -43,7 +43,8 @@ final class Blanking {
   }
 
   private boolean joinsLines(int at) {
-    return at + 1 < source.length() && (source.charAt(at + 1) == '\n' || source.charAt(at + 1) == '\r');
+    return at + 1 < source.length()
+        && (source.charAt(at + 1) == '\n' || source.charAt(at + 1) == '\r');
   }
 
   /** {@code 1'000}: C++14 and C23 separate digits with an apostrophe. */

@@ -11,8 +11,8 @@ import java.util.regex.Pattern;
 
 /**
  * Finds constants in C and C++ sources: {@code #define NAME value}, {@code const} and {@code
- * constexpr} variables, enumerators. The preprocessor is not run: every definition is found, those of
- * all branches of an {@code #if} among them.
+ * constexpr} variables, enumerators. The preprocessor is not run: every definition is found, those
+ * of all branches of an {@code #if} among them.
  */
 public final class Constants {
   /** A value of 0.1f is not 0.1: what single precision may make of it, relative. */
@@ -21,8 +21,7 @@ public final class Constants {
   private static final Pattern DECLARED_CONST =
       Pattern.compile("\\b(?:const|constexpr|constinit)\\b[^;{}]*[\\w*&,>]\\s*$");
 
-  private static final Pattern ENUM_OPENED =
-      Pattern.compile("\\benum\\b[^;{}()]*\\{[^{}]*$");
+  private static final Pattern ENUM_OPENED = Pattern.compile("\\benum\\b[^;{}()]*\\{[^{}]*$");
 
   private final SourceText source;
   private final String code;
@@ -71,7 +70,9 @@ public final class Constants {
     return new Constant(name, source.place(from, to), value, halfDigit, why);
   }
 
-  /** The value of another constant of this source, or null: none, several, or one that is itself. */
+  /**
+   * The value of another constant of this source, or null: none, several, or one that is itself.
+   */
   private Number value(String name) {
     if (!open.add(name)) {
       return null;
@@ -103,7 +104,8 @@ public final class Constants {
     boolean assigned = code.startsWith("=", sign) && !code.startsWith("==", sign);
     boolean braced = code.startsWith("{", sign);
     String before = code.substring(Math.max(0, start - 2000), start);
-    boolean enumerator = assigned && ENUM_OPENED.matcher(before).find() && before.matches("(?s).*[{,]\\s*");
+    boolean enumerator =
+        assigned && ENUM_OPENED.matcher(before).find() && before.matches("(?s).*[{,]\\s*");
     boolean variable = (assigned || braced) && DECLARED_CONST.matcher(before).find();
     if (!enumerator && !variable) {
       return null;

@@ -38,7 +38,16 @@ final class Expression {
 
   private static final Set<String> TYPE_WORDS =
       Set.of(
-          "unsigned", "signed", "char", "short", "int", "long", "float", "double", "bool", "const",
+          "unsigned",
+          "signed",
+          "char",
+          "short",
+          "int",
+          "long",
+          "float",
+          "double",
+          "bool",
+          "const",
           "size_t");
 
   private static final Map<String, Integer> STRENGTH =
@@ -210,7 +219,8 @@ final class Expression {
       at = name.end();
       return name(name.group());
     }
-    throw new NoValue(at >= text.length() ? "it ends too early" : "it is no expression of literals");
+    throw new NoValue(
+        at >= text.length() ? "it ends too early" : "it is no expression of literals");
   }
 
   private Number name(String name) throws NoValue {
@@ -244,7 +254,8 @@ final class Expression {
   private static boolean isType(String words) {
     for (String word : words.strip().split("\\s+")) {
       boolean type =
-          TYPE_WORDS.contains(word) || word.matches("(?:std::)?u?int(?:_fast|_least)?\\d+_t|float\\d+_t");
+          TYPE_WORDS.contains(word)
+              || word.matches("(?:std::)?u?int(?:_fast|_least)?\\d+_t|float\\d+_t");
       if (!type) {
         return false;
       }
@@ -278,7 +289,8 @@ final class Expression {
     if (real) {
       BigDecimal value = new BigDecimal(digits.replaceFirst("\\.(?=e|$)", ""));
       // Trailing zeros are digits too: 2.50 is known to half a hundredth.
-      return Number.real(value.doubleValue(), BigDecimal.valueOf(5, value.scale() + 1).doubleValue());
+      return Number.real(
+          value.doubleValue(), BigDecimal.valueOf(5, value.scale() + 1).doubleValue());
     }
     boolean octal = digits.length() > 1 && digits.startsWith("0");
     return integer(digits, octal ? 8 : 10);

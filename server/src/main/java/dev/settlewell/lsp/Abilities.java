@@ -56,13 +56,12 @@ record Abilities(
   static Abilities of(ClientCapabilities client, Object options) {
     Optional<ClientCapabilities> all = Optional.ofNullable(client);
     Optional<WorkspaceClientCapabilities> workspace = all.map(ClientCapabilities::getWorkspace);
-    Optional<TextDocumentClientCapabilities> document = all.map(ClientCapabilities::getTextDocument);
+    Optional<TextDocumentClientCapabilities> document =
+        all.map(ClientCapabilities::getTextDocument);
     Optional<PublishDiagnosticsCapabilities> publish =
         document.map(TextDocumentClientCapabilities::getPublishDiagnostics);
     Optional<CompletionItemCapabilities> item =
-        document
-            .map(TextDocumentClientCapabilities::getCompletion)
-            .map(c -> c.getCompletionItem());
+        document.map(TextDocumentClientCapabilities::getCompletion).map(c -> c.getCompletionItem());
     Optional<CodeActionCapabilities> action =
         document.map(TextDocumentClientCapabilities::getCodeAction);
     return new Abilities(
@@ -70,13 +69,16 @@ record Abilities(
         is(publish, PublishDiagnosticsCapabilities::getRelatedInformation),
         is(publish, PublishDiagnosticsCapabilities::getCodeDescriptionSupport),
         is(publish, PublishDiagnosticsCapabilities::getDataSupport),
-        publish.map(PublishDiagnosticsCapabilities::getTagSupport).map(Abilities::hasTags)
+        publish
+            .map(PublishDiagnosticsCapabilities::getTagSupport)
+            .map(Abilities::hasTags)
             .orElse(false),
         document.map(TextDocumentClientCapabilities::getDiagnostic).isPresent(),
         is(workspace.map(WorkspaceClientCapabilities::getDiagnostics), d -> d.getRefreshSupport()),
         is(workspace.map(WorkspaceClientCapabilities::getInlayHint), h -> h.getRefreshSupport()),
         is(workspace.map(WorkspaceClientCapabilities::getCodeLens), l -> l.getRefreshSupport()),
-        is(workspace.map(WorkspaceClientCapabilities::getSemanticTokens),
+        is(
+            workspace.map(WorkspaceClientCapabilities::getSemanticTokens),
             t -> t.getRefreshSupport()),
         markdown(
             document
@@ -91,22 +93,29 @@ record Abilities(
             .map(resolve -> resolve.getProperties())
             .map(properties -> properties.contains("edit"))
             .orElse(false),
-        is(workspace.map(WorkspaceClientCapabilities::getWorkspaceEdit),
+        is(
+            workspace.map(WorkspaceClientCapabilities::getWorkspaceEdit),
             edit -> edit.getDocumentChanges()),
-        is(document.map(TextDocumentClientCapabilities::getDocumentSymbol),
+        is(
+            document.map(TextDocumentClientCapabilities::getDocumentSymbol),
             symbol -> symbol.getHierarchicalDocumentSymbolSupport()),
-        is(document.map(TextDocumentClientCapabilities::getDefinition),
+        is(
+            document.map(TextDocumentClientCapabilities::getDefinition),
             definition -> definition.getLinkSupport()),
-        is(document.map(TextDocumentClientCapabilities::getFoldingRange),
+        is(
+            document.map(TextDocumentClientCapabilities::getFoldingRange),
             folding -> folding.getLineFoldingOnly()),
         is(workspace, WorkspaceClientCapabilities::getConfiguration),
-        is(workspace.map(WorkspaceClientCapabilities::getDidChangeWatchedFiles),
+        is(
+            workspace.map(WorkspaceClientCapabilities::getDidChangeWatchedFiles),
             watch -> watch.getDynamicRegistration()),
-        is(workspace.map(WorkspaceClientCapabilities::getDidChangeConfiguration),
+        is(
+            workspace.map(WorkspaceClientCapabilities::getDidChangeConfiguration),
             change -> change.getDynamicRegistration()),
         is(workspace, WorkspaceClientCapabilities::getWorkspaceFolders),
         is(all.map(ClientCapabilities::getWindow), window -> window.getWorkDoneProgress()),
-        is(document.map(TextDocumentClientCapabilities::getRename),
+        is(
+            document.map(TextDocumentClientCapabilities::getRename),
             rename -> rename.getPrepareSupport()));
   }
 
@@ -115,8 +124,7 @@ record Abilities(
   }
 
   private static boolean hasTags(
-      org.eclipse.lsp4j.jsonrpc.messages.Either<
-              Boolean, org.eclipse.lsp4j.DiagnosticsTagSupport>
+      org.eclipse.lsp4j.jsonrpc.messages.Either<Boolean, org.eclipse.lsp4j.DiagnosticsTagSupport>
           support) {
     return support.isLeft()
         ? support.getLeft()

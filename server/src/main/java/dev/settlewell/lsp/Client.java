@@ -58,8 +58,7 @@ final class Client {
 
   CompletableFuture<?> createProgress(String token) {
     return endpoint.request(
-        "window/workDoneProgress/create",
-        new WorkDoneProgressCreateParams(Either.forLeft(token)));
+        "window/workDoneProgress/create", new WorkDoneProgressCreateParams(Either.forLeft(token)));
   }
 
   void progress(String token, WorkDoneProgressNotification value) {

@@ -48,7 +48,8 @@ final class Connection {
     signatures.put(CANCEL, MessageJsonHandler.CANCEL_METHOD);
     this.json = new MessageJsonHandler(signatures);
     this.remote =
-        new RemoteEndpoint(this::send, methods, fault -> session.faults().answer("a request", fault));
+        new RemoteEndpoint(
+            this::send, methods, fault -> session.faults().answer("a request", fault));
     this.validator = new ReflectiveMessageValidator(remote);
     json.setMethodProvider(remote);
     remote.setJsonHandler(json);

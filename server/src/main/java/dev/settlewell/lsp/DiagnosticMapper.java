@@ -45,7 +45,8 @@ final class DiagnosticMapper {
     Abilities can = view.abilities();
     boolean here = finding.place().sheet().equals(checked.text().name());
     Place place = here ? finding.place() : checked.text().place(0, 0);
-    Diagnostic diagnostic = new Diagnostic(ranges.of(checked.text(), place.span()), message(finding));
+    Diagnostic diagnostic =
+        new Diagnostic(ranges.of(checked.text(), place.span()), message(finding));
     diagnostic.setSeverity(severity(finding.severity()));
     diagnostic.setSource(SOURCE);
     diagnostic.setCode(finding.name());
@@ -83,8 +84,7 @@ final class DiagnosticMapper {
   /** Empty where the place is in a file whose text this sheet did not read. */
   private Optional<Location> location(Place place) {
     Optional<SourceText> text = checked.text(place.sheet());
-    return text.map(
-        t -> new Location(view.uri(place.sheet()), ranges.of(t, place.span())));
+    return text.map(t -> new Location(view.uri(place.sheet()), ranges.of(t, place.span())));
   }
 
   private static String message(Finding finding) {

@@ -45,8 +45,7 @@ final class Faults {
       return refused.getResponseError();
     }
     report(method, fault);
-    return new ResponseError(
-        ResponseErrorCode.InternalError, "internal fault in " + method, null);
+    return new ResponseError(ResponseErrorCode.InternalError, "internal fault in " + method, null);
   }
 
   static String describe(Throwable fault) {

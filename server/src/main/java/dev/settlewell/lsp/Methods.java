@@ -53,8 +53,7 @@ final class Methods implements Endpoint {
     } catch (RuntimeException | StackOverflowError fault) {
       session.faults().report(method, fault);
       throw new ResponseErrorException(
-          new ResponseError(
-              ResponseErrorCode.InternalError, "internal fault in " + method, null));
+          new ResponseError(ResponseErrorCode.InternalError, "internal fault in " + method, null));
     }
   }
 
@@ -72,8 +71,7 @@ final class Methods implements Endpoint {
     requests.put(
         method,
         given ->
-            CompletableFuture.completedFuture(
-                answer.apply(present(method, params.cast(given)))));
+            CompletableFuture.completedFuture(answer.apply(present(method, params.cast(given)))));
   }
 
   /** A request without parameters that is answered at once. */

@@ -100,12 +100,12 @@ final class NavigationFeature implements Feature {
         .forEach(used -> sheets.put(used.path(), used));
     view.all()
         .filter(
-            other -> definition.isPresent() && Navigation.definition(other, name).equals(definition))
+            other ->
+                definition.isPresent() && Navigation.definition(other, name).equals(definition))
         .forEach(other -> sheets.putIfAbsent(other.text().name(), other.sheet()));
     Map<SourceText, List<Place>> places = new LinkedHashMap<>();
     for (Sheet sheet : sheets.values()) {
-      List<Place> here =
-          Navigation.occurrences(sheet, view.vocabulary(), name, withDefinition);
+      List<Place> here = Navigation.occurrences(sheet, view.vocabulary(), name, withDefinition);
       if (!here.isEmpty()) {
         places.put(sheet.text(), here);
       }

@@ -80,8 +80,7 @@ final class Publisher {
       progress.step();
     }
     boolean wanted = draft.isPresent() || view.sheets().contains(name);
-    List<Diagnostic> diagnostics =
-        wanted ? Diagnosis.of(name, view, session.faults()) : List.of();
+    List<Diagnostic> diagnostics = wanted ? Diagnosis.of(name, view, session.faults()) : List.of();
     if (!isOutdated(draft)) {
       show(name, draft, diagnostics);
     }

@@ -48,8 +48,7 @@ final class TextSync {
             params.getContentChanges(),
             session.view().abilities().encoding());
     if (text.isEmpty() && before.text().isPresent()) {
-      log(
-          "a change of " + uri + " lies outside its text; it is checked again once it is reopened");
+      log("a change of " + uri + " lies outside its text; it is checked again once it is reopened");
     }
     keep(new Draft(before.uri(), before.name(), version, text));
   }

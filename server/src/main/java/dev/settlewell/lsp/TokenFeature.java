@@ -13,7 +13,6 @@ import org.eclipse.lsp4j.SemanticTokensParams;
 import org.eclipse.lsp4j.SemanticTokensRangeParams;
 import org.eclipse.lsp4j.SemanticTokensWithRegistrationOptions;
 import org.eclipse.lsp4j.ServerCapabilities;
-import org.eclipse.lsp4j.jsonrpc.CancelChecker;
 
 /** {@code textDocument/semanticTokens}, of a whole sheet or a range. */
 final class TokenFeature implements Feature {

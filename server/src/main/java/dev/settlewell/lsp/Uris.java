@@ -7,8 +7,8 @@ import java.util.Locale;
 /**
  * The names of sheets: what a client calls a document, and what everything below calls it.
  *
- * <p>Below the server a file is known by its absolute path with {@code /}; a document without a file
- * keeps its URI. Clients spell one file in several ways ({@code file:///c%3A/a}, {@code
+ * <p>Below the server a file is known by its absolute path with {@code /}; a document without a
+ * file keeps its URI. Clients spell one file in several ways ({@code file:///c%3A/a}, {@code
  * file:///C:/a}); all of them give one name.
  */
 final class Uris {

@@ -22,8 +22,7 @@ final class Worker implements AutoCloseable {
     BACKGROUND
   }
 
-  private record Task(Rank rank, long number, Runnable work)
-      implements Runnable, Comparable<Task> {
+  private record Task(Rank rank, long number, Runnable work) implements Runnable, Comparable<Task> {
     @Override
     public void run() {
       work.run();

@@ -155,8 +155,7 @@ public record Comparison(List<SheetChange> sheets, int unchanged) {
       owners.put(
           "channel " + channel.channel().name() + scan,
           new Figures(
-              Stream.concat(
-                      channel.figures().all().stream(), BudgetFigures.of(channel).stream())
+              Stream.concat(channel.figures().all().stream(), BudgetFigures.of(channel).stream())
                   .toList()));
     }
   }

@@ -33,8 +33,11 @@ public final class ComparisonText {
     line(
         changed == 0
             ? "no figure and no finding changed"
-            : changed + (changed == 1 ? " sheet" : " sheets") + " changed, "
-                + comparison.unchanged() + " not");
+            : changed
+                + (changed == 1 ? " sheet" : " sheets")
+                + " changed, "
+                + comparison.unchanged()
+                + " not");
     return out.toString();
   }
 
@@ -62,13 +65,9 @@ public final class ComparisonText {
     blankIf(!change.figures().isEmpty());
   }
 
-  private void findings(
-      String heading, List<Finding> findings, Optional<Reviewed> sheet) {
+  private void findings(String heading, List<Finding> findings, Optional<Reviewed> sheet) {
     for (Finding finding : findings) {
-      String at =
-          sheet
-              .map(s -> new Locations(List.of(s)).pointer(finding.place()))
-              .orElse("");
+      String at = sheet.map(s -> new Locations(List.of(s)).pointer(finding.place())).orElse("");
       String what = heading + ": " + finding.severity().label() + " ";
       String message = Terminal.line(finding.message());
       line(

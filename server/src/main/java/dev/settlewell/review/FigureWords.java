@@ -17,16 +17,12 @@ final class FigureWords {
     }
     if (state instanceof Figure.State.Missing missing) {
       return "- lacks "
-          + missing.inputs().stream()
-              .map(Figure.Input::pointer)
-              .collect(Collectors.joining(", "));
+          + missing.inputs().stream().map(Figure.Input::pointer).collect(Collectors.joining(", "));
     }
     if (state instanceof Figure.State.None none) {
       return "none: " + none.why();
     }
-    return state instanceof Figure.State.Unlimited
-        ? "unlimited"
-        : "- a value it rests on is wrong";
+    return state instanceof Figure.State.Unlimited ? "unlimited" : "- a value it rests on is wrong";
   }
 
   static String value(double value, String unit, boolean share) {

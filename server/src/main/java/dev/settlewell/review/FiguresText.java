@@ -167,7 +167,7 @@ public final class FiguresText {
   }
 
   private void line(String text) {
-    Terminal.wrapped(text, COLUMNS, NAME_COLUMNS + 3).forEach(
-        part -> out.append(part).append('\n'));
+    Terminal.wrapped(text, COLUMNS, NAME_COLUMNS + 3)
+        .forEach(part -> out.append(part).append('\n'));
   }
 }

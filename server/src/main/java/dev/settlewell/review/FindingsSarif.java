@@ -145,8 +145,7 @@ public final class FindingsSarif {
     notification.add("message", text(finding.message()));
     notification.add(
         "locations",
-        Json.array(
-            List.of(finding.place()), place -> object("physicalLocation", physical(place))));
+        Json.array(List.of(finding.place()), place -> object("physicalLocation", physical(place))));
     return notification;
   }
 
@@ -180,14 +179,18 @@ public final class FindingsSarif {
       result.add("relatedLocations", related);
     }
     result.add("partialFingerprints", fingerprints(sheet, finding));
-    result.add("suppressions", Json.array(finding.acceptance().stream().toList(), a -> {
-      JsonObject suppression = new JsonObject();
-      suppression.addProperty("kind", "inSource");
-      suppression.addProperty("status", "accepted");
-      suppression.addProperty("justification", a.because());
-      suppression.add("location", object("physicalLocation", physical(a.place())));
-      return suppression;
-    }));
+    result.add(
+        "suppressions",
+        Json.array(
+            finding.acceptance().stream().toList(),
+            a -> {
+              JsonObject suppression = new JsonObject();
+              suppression.addProperty("kind", "inSource");
+              suppression.addProperty("status", "accepted");
+              suppression.addProperty("justification", a.because());
+              suppression.add("location", object("physicalLocation", physical(a.place())));
+              return suppression;
+            }));
     List<Fix> remedies = sheet.remedies().getOrDefault(finding, List.of());
     Json.arrayIfAny(result, "fixes", remedies, this::fix);
     return result;
@@ -198,7 +201,8 @@ public final class FindingsSarif {
     StringBuilder message = new StringBuilder(finding.message());
     finding
         .facts()
-        .forEach(fact -> message.append('\n').append(fact.label()).append(": ").append(fact.text()));
+        .forEach(
+            fact -> message.append('\n').append(fact.label()).append(": ").append(fact.text()));
     return message.toString();
   }
 
@@ -264,9 +268,7 @@ public final class FindingsSarif {
   private JsonObject fix(Fix fix) {
     Map<String, JsonArray> bySheet = new LinkedHashMap<>();
     for (Edit edit : fix.edits()) {
-      bySheet
-          .computeIfAbsent(edit.place().sheet(), path -> new JsonArray())
-          .add(replacement(edit));
+      bySheet.computeIfAbsent(edit.place().sheet(), path -> new JsonArray()).add(replacement(edit));
     }
     JsonArray changes = new JsonArray();
     bySheet.forEach(

@@ -7,8 +7,8 @@ import dev.settlewell.text.Related;
 import java.util.List;
 
 /**
- * Findings for people: where, how grave, its name; the value with a mark under it; the sentence; the
- * figures in rows; the other places that take part.
+ * Findings for people: where, how grave, its name; the value with a mark under it; the sentence;
+ * the figures in rows; the other places that take part.
  */
 public final class FindingsText {
   private static final String INDENT = "  ";
@@ -47,9 +47,7 @@ public final class FindingsText {
     facts(finding.facts());
     finding.related().forEach(this::related);
     sheet.remedies().getOrDefault(finding, List.of()).forEach(this::remedy);
-    finding
-        .acceptance()
-        .ifPresent(a -> line(INDENT + "accepted: " + Terminal.line(a.because())));
+    finding.acceptance().ifPresent(a -> line(INDENT + "accepted: " + Terminal.line(a.because())));
     out.append('\n');
   }
 

@@ -13,7 +13,9 @@ import java.util.List;
 import java.util.OptionalDouble;
 import java.util.function.Function;
 
-/** How all JSON of ours is written: two blanks, ten significant digits, nothing of the machine's. */
+/**
+ * How all JSON of ours is written: two blanks, ten significant digits, nothing of the machine's.
+ */
 final class Json {
   /** The last bits of a figure differ between versions of Java; these digits do not. */
   private static final MathContext DIGITS = new MathContext(10, RoundingMode.HALF_EVEN);

@@ -13,7 +13,6 @@ record Location(int line, int column, int endLine, int endColumn) {
   static Location of(SourceText text, Span span, PositionEncoding columns) {
     var start = text.position(span.start(), columns);
     var end = text.position(span.end(), columns);
-    return new Location(
-        start.line() + 1, start.column() + 1, end.line() + 1, end.column() + 1);
+    return new Location(start.line() + 1, start.column() + 1, end.line() + 1, end.column() + 1);
   }
 }

@@ -65,7 +65,9 @@ public final class MendingText {
     String what =
         fixes == 0
             ? "nothing to mend"
-            : fixes + (fixes == 1 ? " change in " : " changes in ") + paths.size()
+            : fixes
+                + (fixes == 1 ? " change in " : " changes in ")
+                + paths.size()
                 + (paths.size() == 1 ? " sheet" : " sheets")
                 + (dryRun ? "; nothing was written" : "");
     return out + what + "\n";

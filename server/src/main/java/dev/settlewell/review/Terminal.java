@@ -25,8 +25,12 @@ final class Terminal {
     if (c == '\t') {
       return ' ';
     }
-    boolean turns = c == 0x061C || c == 0x200E || c == 0x200F || 0x202A <= c && c <= 0x202E
-        || 0x2066 <= c && c <= 0x2069;
+    boolean turns =
+        c == 0x061C
+            || c == 0x200E
+            || c == 0x200F
+            || 0x202A <= c && c <= 0x202E
+            || 0x2066 <= c && c <= 0x2069;
     int type = Character.getType(c);
     boolean breaks = type == Character.LINE_SEPARATOR || type == Character.PARAGRAPH_SEPARATOR;
     boolean alone = type == Character.SURROGATE;
@@ -40,15 +44,23 @@ final class Terminal {
 
   private static int width(int c) {
     int type = Character.getType(c);
-    boolean combines = type == Character.NON_SPACING_MARK || type == Character.ENCLOSING_MARK
-        || type == Character.FORMAT;
+    boolean combines =
+        type == Character.NON_SPACING_MARK
+            || type == Character.ENCLOSING_MARK
+            || type == Character.FORMAT;
     if (combines) {
       return 0;
     }
-    boolean wide = 0x1100 <= c && c <= 0x115F || 0x2E80 <= c && c <= 0xA4CF
-        || 0xAC00 <= c && c <= 0xD7A3 || 0xF900 <= c && c <= 0xFAFF || 0xFE30 <= c && c <= 0xFE6F
-        || 0xFF00 <= c && c <= 0xFF60 || 0xFFE0 <= c && c <= 0xFFE6
-        || 0x1F300 <= c && c <= 0x1FAFF || 0x20000 <= c && c <= 0x3FFFD;
+    boolean wide =
+        0x1100 <= c && c <= 0x115F
+            || 0x2E80 <= c && c <= 0xA4CF
+            || 0xAC00 <= c && c <= 0xD7A3
+            || 0xF900 <= c && c <= 0xFAFF
+            || 0xFE30 <= c && c <= 0xFE6F
+            || 0xFF00 <= c && c <= 0xFF60
+            || 0xFFE0 <= c && c <= 0xFFE6
+            || 0x1F300 <= c && c <= 0x1FAFF
+            || 0x20000 <= c && c <= 0x3FFFD;
     return wide ? 2 : 1;
   }
 
@@ -75,7 +87,8 @@ final class Terminal {
   private static int breakAt(String line, int columns, int indentation) {
     int best = -1;
     int start = line.length() - line.stripLeading().length();
-    for (int i = line.indexOf(' ', Math.max(start, indentation)); i >= 0;
+    for (int i = line.indexOf(' ', Math.max(start, indentation));
+        i >= 0;
         i = line.indexOf(' ', i + 1)) {
       if (best >= 0 && shownWidth(line.substring(0, i)) > columns) {
         break;

@@ -84,7 +84,10 @@ final class Binder {
     report.add(
         Problem.Kind.WRONG_KIND,
         keyPlace,
-        "`" + text.slice(keyPlace.span()) + "` has no value: write one" + example(examples)
+        "`"
+            + text.slice(keyPlace.span())
+            + "` has no value: write one"
+            + example(examples)
             + ", or remove the key");
     return new Slot.Wrong<>(keyPlace, "", pointer);
   }
@@ -175,8 +178,7 @@ final class Binder {
   }
 
   /** A mapping of a known kind, bound; what a whole sheet is, and every part of it. */
-  Part mapping(
-      Kind kind, Node.Mapping mapping, Place keyPlace, String pointer, Scope outer) {
+  Part mapping(Kind kind, Node.Mapping mapping, Place keyPlace, String pointer, Scope outer) {
     Entries entries = Entries.of(mapping, report);
     slips.unknownKeys(kind, entries);
     Map<String, Slot<?>> early = new HashMap<>();
@@ -226,7 +228,8 @@ final class Binder {
       Place keyPlace,
       String pointer,
       Scope scope) {
-    boolean inPieces = kind.shortKey().filter(key.name()::equals).isPresent() && hasPieces(kind, entries);
+    boolean inPieces =
+        kind.shortKey().filter(key.name()::equals).isPresent() && hasPieces(kind, entries);
     if (inPieces) {
       return longForm.read(key, entries, keyPlace, mapping.place(), pointer, scope);
     }
@@ -387,7 +390,8 @@ final class Binder {
       return new Slot.Stated<Object>(Map.of(), keyPlace, keyPlace, "", pointer);
     }
     if (!(node instanceof Node.Mapping mapping)) {
-      return wrongKind(key, node, pointer, "takes names with a value each" + example(key.examples()));
+      return wrongKind(
+          key, node, pointer, "takes names with a value each" + example(key.examples()));
     }
     Key item = key.item().orElseThrow();
     Key.MapNames names = key.names().orElseThrow();
@@ -407,7 +411,8 @@ final class Binder {
             "the first");
         continue;
       }
-      names.nameKind()
+      names
+          .nameKind()
           .ifPresent(kind -> definitions.add(new Definition(kind, name.text(), name.place())));
       slots.put(canonical.get(), value(item, entry.value(), name.place(), below, scope));
     }

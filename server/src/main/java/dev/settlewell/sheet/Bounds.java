@@ -47,7 +47,9 @@ final class Bounds {
     if (takes.most().isPresent() && value > takes.most().get()) {
       return Optional.of("`" + key.name() + "` must be at most " + plain(takes.most().get(), unit));
     }
-    if (value == Math.rint(value) && isWordedNumber(key) && !key.words().contains(plain(value, ""))) {
+    if (value == Math.rint(value)
+        && isWordedNumber(key)
+        && !key.words().contains(plain(value, ""))) {
       return Optional.of(
           "`" + key.name() + "` takes " + String.join(", ", key.words()) + " and nothing else");
     }

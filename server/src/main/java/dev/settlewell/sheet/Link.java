@@ -4,7 +4,6 @@ import dev.settlewell.syntax.Node;
 import dev.settlewell.text.Place;
 import dev.settlewell.text.Problem;
 import dev.settlewell.text.Related;
-import dev.settlewell.unit.Toleranced;
 import dev.settlewell.vocabulary.NameKind;
 import dev.settlewell.vocabulary.Vocabulary;
 import java.time.LocalDate;
@@ -77,7 +76,8 @@ public final class Link {
 
   private void gatherMeanings() {
     for (NameKind kind : NameKind.values()) {
-      named(sheet, kind).forEach((name, place) -> meanings.putIfAbsent(name, new Meaning(kind, place)));
+      named(sheet, kind)
+          .forEach((name, place) -> meanings.putIfAbsent(name, new Meaning(kind, place)));
     }
     for (Sheet other : used) {
       for (NameKind kind : SHARED) {
@@ -95,8 +95,15 @@ public final class Link {
     boolean here = before.place().sheet().equals(sheet.path());
     Place place = here ? before.place() : useKey();
     String message =
-        "the name `" + name + "` is defined twice: as " + before.kind().withArticle() + " in "
-            + before.place().sheet() + " and as " + theirs.kind().withArticle() + " in "
+        "the name `"
+            + name
+            + "` is defined twice: as "
+            + before.kind().withArticle()
+            + " in "
+            + before.place().sheet()
+            + " and as "
+            + theirs.kind().withArticle()
+            + " in "
             + theirs.place().sheet();
     report.add(
         new Problem(
@@ -166,7 +173,12 @@ public final class Link {
         new Problem(
             Problem.Kind.UNKNOWN_NAME,
             reference.place(),
-            "`" + reference.name() + "` names " + meaning.kind().withArticle() + "; no " + words(reference)
+            "`"
+                + reference.name()
+                + "` names "
+                + meaning.kind().withArticle()
+                + "; no "
+                + words(reference)
                 + " is named so",
             List.of(new Related(meaning.place(), "the " + meaning.kind().word())),
             List.of()));

@@ -11,8 +11,8 @@ import java.util.Optional;
 import java.util.stream.Stream;
 
 /**
- * A sheet together with all it uses: what its names mean, wherever they are defined, and the sources
- * of the firmware that it is held against.
+ * A sheet together with all it uses: what its names mean, wherever they are defined, and the
+ * sources of the firmware that it is held against.
  *
  * @param used every sheet reached by {@code use}, nearest first, without this one
  * @param supplies of this sheet and of the used ones

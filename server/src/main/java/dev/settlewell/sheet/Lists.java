@@ -15,8 +15,7 @@ final class Lists {
   /** True where it does; else a problem says why not. */
   static boolean check(Key key, List<Slot<?>> slots, Node.Sequence list, Report report) {
     if (key.takes().notEmpty() && slots.isEmpty()) {
-      report.add(
-          Problem.Kind.VALUE_OUT_OF_RANGE, list.place(), "`" + key.name() + "` is empty");
+      report.add(Problem.Kind.VALUE_OUT_OF_RANGE, list.place(), "`" + key.name() + "` is empty");
       return false;
     }
     Optional<Integer> size = key.takes().size();
@@ -24,7 +23,12 @@ final class Lists {
       report.add(
           Problem.Kind.VALUE_OUT_OF_RANGE,
           list.place(),
-          "`" + key.name() + "` takes " + size.get() + " values, and here are " + slots.size()
+          "`"
+              + key.name()
+              + "` takes "
+              + size.get()
+              + " values, and here are "
+              + slots.size()
               + commaHint(list));
       return false;
     }
@@ -50,7 +54,9 @@ final class Lists {
         report.add(
             Problem.Kind.VALUE_OUT_OF_RANGE,
             place,
-            "`" + key.name() + "` must rise from value to value; "
+            "`"
+                + key.name()
+                + "` must rise from value to value; "
                 + "a decimal comma splits a number in two: write a point");
         return false;
       }
@@ -59,8 +65,7 @@ final class Lists {
   }
 
   /** At least two points, values rising, outputs of one dimension and monotone. */
-  private static boolean isCurve(
-      Key key, List<Slot<?>> slots, Node.Sequence list, Report report) {
+  private static boolean isCurve(Key key, List<Slot<?>> slots, Node.Sequence list, Report report) {
     if (slots.stream().anyMatch(slot -> !isWhole(slot))) {
       return true; // each wrong point has its own problem
     }
@@ -87,7 +92,8 @@ final class Lists {
               : !output.unit().comparableWith(last.unit())
                   ? "the outputs of all points must have one unit"
                   : step == 0 || step * direction < 0
-                      ? "the outputs must rise or fall from point to point, else one output has two values"
+                      ? "the outputs must rise or fall from point to point, else one output has two"
+                            + " values"
                       : null;
       if (fault != null) {
         report.add(Problem.Kind.VALUE_OUT_OF_RANGE, here.place(), fault);

@@ -23,12 +23,13 @@ import java.util.OptionalDouble;
 import java.util.Set;
 
 /**
- * A quantity written as a mapping: {@code {value, tolerance, drift}}, or the columns of a data sheet
- * {@code {min, typical, max}}.
+ * A quantity written as a mapping: {@code {value, tolerance, drift}}, or the columns of a data
+ * sheet {@code {min, typical, max}}.
  *
- * <p>Nominal is {@code value}, else {@code typical}, else the middle of {@code min} and {@code max},
- * else {@code max}. Without {@code min} the range is {@code typical} to {@code max}, without {@code
- * max} it is {@code min} to {@code typical}; {@code typical} alone counts as exact and says so.
+ * <p>Nominal is {@code value}, else {@code typical}, else the middle of {@code min} and {@code
+ * max}, else {@code max}. Without {@code min} the range is {@code typical} to {@code max}, without
+ * {@code max} it is {@code min} to {@code typical}; {@code typical} alone counts as exact and says
+ * so.
  */
 final class LongForm {
   private static final List<String> AMOUNTS = List.of("value", "min", "typical", "max");
@@ -46,12 +47,7 @@ final class LongForm {
    * @param entries those of the mapping; keys that are no piece of a long form are not looked at
    */
   Slot<Toleranced> read(
-      Key key,
-      Entries entries,
-      Place keyPlace,
-      Place place,
-      String pointer,
-      Scope scope) {
+      Key key, Entries entries, Place keyPlace, Place place, String pointer, Scope scope) {
     Map<String, Toleranced> amounts = new HashMap<>();
     boolean whole = true;
     for (String name : AMOUNTS) {
@@ -187,11 +183,7 @@ final class LongForm {
 
   /** The value with what one more piece says of its errors; nothing may be said twice. */
   private Optional<Toleranced> joined(
-      Toleranced value,
-      Optional<Deviation> added,
-      Entries entries,
-      String name,
-      Place keyPlace) {
+      Toleranced value, Optional<Deviation> added, Entries entries, String name, Place keyPlace) {
     if (added.isEmpty()) {
       return Optional.of(value);
     }
@@ -199,7 +191,8 @@ final class LongForm {
     Deviation more = added.get();
     boolean limits = value.min().isPresent() || !own.tolerances().isEmpty();
     boolean twice =
-        limits && !more.tolerances().isEmpty() || own.drift().isPresent() && more.drift().isPresent();
+        limits && !more.tolerances().isEmpty()
+            || own.drift().isPresent() && more.drift().isPresent();
     if (twice) {
       report.add(
           new Problem(

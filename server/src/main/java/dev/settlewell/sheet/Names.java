@@ -41,16 +41,12 @@ final class Names {
       return Optional.of(text);
     }
     String mended =
-        text.toLowerCase(Locale.ROOT)
-            .replaceAll("[^a-z0-9]+", "-")
-            .replaceAll("^[^a-z]+|-+$", "");
-    String message =
-        "`" + text + "` is no name: small letters, digits and hyphens, a letter first";
+        text.toLowerCase(Locale.ROOT).replaceAll("[^a-z0-9]+", "-").replaceAll("^[^a-z]+|-+$", "");
+    String message = "`" + text + "` is no name: small letters, digits and hyphens, a letter first";
     if (mended.isEmpty() || RESERVED.contains(mended)) {
       report.add(Problem.Kind.SYNTAX, name.place(), message);
     } else {
-      report.add(
-          Problem.Kind.SYNTAX, name.place(), message, Report.replace(name.place(), mended));
+      report.add(Problem.Kind.SYNTAX, name.place(), message, Report.replace(name.place(), mended));
     }
     // Known under its text all the same, so that what refers to it is not reported as well.
     return names.nameKind().isPresent() ? Optional.of(text) : Optional.empty();

@@ -77,7 +77,10 @@ public record Part(
     return as(key, Need.class);
   }
 
-  /** Forms {@code count}, {@code plain}, {@code ratio} (as a plain ratio, dB turned into it), {@code fraction}. */
+  /**
+   * Forms {@code count}, {@code plain}, {@code ratio} (as a plain ratio, dB turned into it), {@code
+   * fraction}.
+   */
   public Slot<Double> number(String key) {
     return as(key, Double.class);
   }

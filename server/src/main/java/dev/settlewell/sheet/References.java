@@ -52,7 +52,10 @@ public final class References {
       map.values().forEach(item -> slot(key.item().orElseThrow(), (Slot<?>) item));
     } else if (value instanceof Either either) {
       either.quantity().ifPresent(quantity -> value(key, quantity, place));
-      either.word().filter(word -> !key.words().contains(word)).ifPresent(w -> named(key, w, place));
+      either
+          .word()
+          .filter(word -> !key.words().contains(word))
+          .ifPresent(w -> named(key, w, place));
     } else if (value instanceof Toleranced quantity) {
       quantity.of().ifPresent(supply -> add(Set.of(NameKind.SUPPLY), supply, place));
     } else if (value instanceof String word && key.name().equals(EQUALS)) {

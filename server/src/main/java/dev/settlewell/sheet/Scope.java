@@ -27,8 +27,7 @@ record Scope(Optional<Unit> measured, Map<String, Deviation> defaults) {
    * Tolerance and drift are filled in separately. A value whose limits are given as values, or that
    * is stated as typical only, has said what there is to say of its tolerance.
    */
-  Toleranced filled(
-      Toleranced value, Optional<String> errorsFrom) {
+  Toleranced filled(Toleranced value, Optional<String> errorsFrom) {
     Deviation fill = errorsFrom.map(defaults::get).orElse(null);
     if (fill == null) {
       return value;

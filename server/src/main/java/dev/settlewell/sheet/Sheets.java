@@ -30,8 +30,7 @@ public final class Sheets {
     Part top = binder.sheet(tree.root());
     Names.requireOneMeaning(binder.definitions(), report);
     Map<NameKind, Map<String, Place>> places = places(binder.definitions());
-    Map<String, Named<Part>> converters =
-        named(top, NameKind.CONVERTER, Part.class, places);
+    Map<String, Named<Part>> converters = named(top, NameKind.CONVERTER, Part.class, places);
     converters.values().forEach(converter -> checkTotal(converter.value(), report));
     return new Sheet(
         tree.text(),
@@ -62,12 +61,13 @@ public final class Sheets {
     top.map(kind.section(), type)
         .orElse(Map.of())
         .forEach(
-            (name, slot) ->
-                named.put(name, new Named<>(name, places.get(kind).get(name), slot)));
+            (name, slot) -> named.put(name, new Named<>(name, places.get(kind).get(name), slot)));
     return Collections.unmodifiableMap(named);
   }
 
-  /** The total unadjusted error holds offset, gain and non-linearity: beside it they count twice. */
+  /**
+   * The total unadjusted error holds offset, gain and non-linearity: beside it they count twice.
+   */
   private static void checkTotal(Slot<Part> converter, Report report) {
     Part part = converter.stated().orElse(null);
     if (part == null || !part.has("total-unadjusted-error")) {

@@ -19,8 +19,8 @@ import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
 /**
- * Slips in the shape of a sheet that only the schema shows, each with the way to mend it. Those that
- * YAML itself shows are met where the tree is read.
+ * Slips in the shape of a sheet that only the schema shows, each with the way to mend it. Those
+ * that YAML itself shows are met where the tree is read.
  */
 final class Slips {
   private static final Pattern WHOLE_NUMBER = Pattern.compile("[-+±]?\\d+");
@@ -79,8 +79,14 @@ final class Slips {
     report.add(
         Problem.Kind.WRONG_KIND,
         sequence.place(),
-        "a " + kind.name() + " takes exactly " + kind.columns().size() + " values, `["
-            + String.join(", ", kind.columns()) + "]`, and here are " + items.size());
+        "a "
+            + kind.name()
+            + " takes exactly "
+            + kind.columns().size()
+            + " values, `["
+            + String.join(", ", kind.columns())
+            + "]`, and here are "
+            + items.size());
   }
 
   // --- keys ------------------------------------------------------------------------------------
@@ -99,10 +105,7 @@ final class Slips {
           key.text(),
           whole + " has no key `" + key.text() + "`",
           // The pieces of a long form are known, and too many to name.
-          kind.keys().values().stream()
-              .filter(k -> k.partOf().isEmpty())
-              .map(Key::name)
-              .toList());
+          kind.keys().values().stream().filter(k -> k.partOf().isEmpty()).map(Key::name).toList());
     }
   }
 
@@ -159,15 +162,24 @@ final class Slips {
         !mapping.flow()
             && first.value() instanceof Node.Absent
             && rest.stream().anyMatch(entry -> kind.keys().containsKey(entry.key().text()))
-            && rest.stream().allMatch(entry -> !vocabulary.find(entry.key().text()).isPresent()
-                || kind.keys().containsKey(entry.key().text()));
+            && rest.stream()
+                .allMatch(
+                    entry ->
+                        !vocabulary.find(entry.key().text()).isPresent()
+                            || kind.keys().containsKey(entry.key().text()));
     if (beside) {
       String name = first.key().text();
       report.add(
           Problem.Kind.WRONG_KIND,
           first.key().place(),
-          "`" + rest.get(0).key().text() + "` stands beside `" + name + "`, not below it: indent"
-              + " the keys of `" + name + "` by two more blanks",
+          "`"
+              + rest.get(0).key().text()
+              + "` stands beside `"
+              + name
+              + "`, not below it: indent"
+              + " the keys of `"
+              + name
+              + "` by two more blanks",
           new Fix("indent the keys below `" + name + "`", indent(rest), true));
     }
     return beside;

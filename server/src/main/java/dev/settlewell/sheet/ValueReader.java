@@ -57,8 +57,8 @@ final class ValueReader {
           case PART, ONE_KIND, LIST, MAP ->
               throw new IllegalArgumentException(key.name() + " is no scalar");
         };
-    return value.<Slot<?>>map(
-            v -> new Slot.Stated<Object>(v, keyPlace, scalar.place(), raw, pointer))
+    return value
+        .<Slot<?>>map(v -> new Slot.Stated<Object>(v, keyPlace, scalar.place(), raw, pointer))
         .orElseGet(() -> new Slot.Wrong<>(scalar.place(), raw, pointer));
   }
 
@@ -176,8 +176,7 @@ final class ValueReader {
       LocalDate.parse(raw);
       return Optional.of(raw);
     } catch (DateTimeParseException e) {
-      report.add(
-          Problem.Kind.VALUE_OUT_OF_RANGE, scalar.place(), "no calendar has the day " + raw);
+      report.add(Problem.Kind.VALUE_OUT_OF_RANGE, scalar.place(), "no calendar has the day " + raw);
       return Optional.empty();
     }
   }

@@ -10,8 +10,8 @@ public final class Nearest {
 
   /**
    * The nearest of {@code known}, the first of equals; empty where none is near enough to be a slip
-   * of the keyboard: more than a third of the letters would have to change. Capitals,
-   * blanks and underscores count nothing.
+   * of the keyboard: more than a third of the letters would have to change. Capitals, blanks and
+   * underscores count nothing.
    */
   public static Optional<String> of(String text, Collection<String> known) {
     String written = text.toLowerCase(Locale.ROOT).replace('_', '-').replace(' ', '-');
@@ -45,8 +45,7 @@ public final class Nearest {
     for (int i = 1; i <= a.length(); i++) {
       for (int j = 1; j <= b.length(); j++) {
         int change = a.charAt(i - 1) == b.charAt(j - 1) ? 0 : 1;
-        d[i][j] =
-            Math.min(Math.min(d[i - 1][j], d[i][j - 1]) + 1, d[i - 1][j - 1] + change);
+        d[i][j] = Math.min(Math.min(d[i - 1][j], d[i][j - 1]) + 1, d[i - 1][j - 1] + change);
         boolean swapped =
             i > 1
                 && j > 1

@@ -114,8 +114,7 @@ final class SchemaReader {
         case MEASURED -> measured = Key.Measured.YES;
         case MEASURED_PER_SECOND -> measured = Key.Measured.PER_SECOND;
         default ->
-            dimensions.add(
-                Dimension.valueOf(word.toUpperCase(Locale.ROOT).replace('-', '_')));
+            dimensions.add(Dimension.valueOf(word.toUpperCase(Locale.ROOT).replace('-', '_')));
       }
     }
     return new Key.Takes(

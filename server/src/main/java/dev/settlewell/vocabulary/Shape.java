@@ -2,7 +2,10 @@ package dev.settlewell.vocabulary;
 
 import java.util.Locale;
 
-/** What stands at a key: the schema's {@code x-form}. The first ten are read by the grammar of values. */
+/**
+ * What stands at a key: the schema's {@code x-form}. The first ten are read by the grammar of
+ * values.
+ */
 public enum Shape {
   QUANTITY,
   COMPONENT,

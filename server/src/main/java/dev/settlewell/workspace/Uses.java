@@ -20,7 +20,8 @@ import java.util.Optional;
 
 /**
  * Follows {@code use} from sheet to sheet, inside the workspace only: the nearest folder above a
- * sheet with a {@code .git} or the project file, else the sheet's own folder. Each file is read once.
+ * sheet with a {@code .git} or the project file, else the sheet's own folder. Each file is read
+ * once.
  */
 final class Uses {
   /** Sheets that one sheet may reach; more is a mistake, and would never end to be read. */
@@ -61,8 +62,7 @@ final class Uses {
           step.problem().ifPresent(problems::add);
         }
         Optional<String> next =
-            step.path()
-                .filter(path -> !path.equals(sheet.path()) && !reached.containsKey(path));
+            step.path().filter(path -> !path.equals(sheet.path()) && !reached.containsKey(path));
         if (next.isPresent()) {
           Sheet used = read(next.get());
           reached.put(next.get(), used);
@@ -71,8 +71,7 @@ final class Uses {
       }
     }
     circles(sheet, problems);
-    return memo.linked(
-        sheet, List.copyOf(reached.values()), whole, problems, sources(sheet), date);
+    return memo.linked(sheet, List.copyOf(reached.values()), whole, problems, sources(sheet), date);
   }
 
   /** The source files that the sheet's firmware constants stand in, by the path as written. */
@@ -179,14 +178,16 @@ final class Uses {
       return refused(
           Problem.Kind.USE_OUTSIDE_WORKSPACE,
           place,
-          "`" + written + "` lies outside the workspace: put a " + Workspace.PROJECT_FILE
+          "`"
+              + written
+              + "` lies outside the workspace: put a "
+              + Workspace.PROJECT_FILE
               + " into the folder that holds both sheets");
     }
     String path = names.computeIfAbsent(real, asked -> Paths.resolve(folder, written));
     SheetReader.Content content = content(path);
     if (content.text().isEmpty()) {
-      return refused(
-          Problem.Kind.USE_NOT_FOUND, place, "`" + path + "`: " + content.why());
+      return refused(Problem.Kind.USE_NOT_FOUND, place, "`" + path + "`: " + content.why());
     }
     return new Step(Optional.of(path), Optional.empty(), place);
   }

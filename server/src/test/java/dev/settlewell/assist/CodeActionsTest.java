@@ -23,10 +23,7 @@ class CodeActionsTest {
   }
 
   private static List<String> names(String text) {
-    return Sample.findings(text).stream()
-        .filter(f -> !f.isAccepted())
-        .map(Finding::name)
-        .toList();
+    return Sample.findings(text).stream().filter(f -> !f.isAccepted()).map(Finding::name).toList();
   }
 
   @Test
@@ -48,7 +45,8 @@ class CodeActionsTest {
     Sample sample = Sample.board("acquisition: 24 cycles", "acquisition: 25 cy‸cles");
     Action action =
         actions(sample).stream()
-            .filter(a -> a.finding().map(f -> f.name().equals("acquisition-not-offered")).orElse(false))
+            .filter(
+                a -> a.finding().map(f -> f.name().equals("acquisition-not-offered")).orElse(false))
             .findFirst()
             .orElseThrow();
     String mended = Sample.apply(sample.checked().text(), action.edits());
@@ -86,7 +84,8 @@ class CodeActionsTest {
         assertThat(action.edits()).allMatch(edit -> !edit.replacement().isBlank());
       }
     }
-    Sample wrong = Sample.of("‸" + Sample.BOARD.replace("acquisition: 24 cycles", "acquisition: 25 cycles"));
+    Sample wrong =
+        Sample.of("‸" + Sample.BOARD.replace("acquisition: 24 cycles", "acquisition: 25 cycles"));
     assertThat(actions(wrong)).noneMatch(action -> action.sort() == Sort.FIX_ALL);
   }
 

@@ -58,8 +58,8 @@ class CompletionTest {
 
   /**
    * 100 Ω and 4.7 kΩ charge 5 pF: the time constant with the switch is 29 ns, so 6.9 of them (1/2
-   * LSB of 12 bits is 2^-13, ln 2^13 = 9.0) fit into a fraction of a microsecond, two cycles of
-   * 125 ns; all that are offered suffice.
+   * LSB of 12 bits is 2^-13, ln 2^13 = 9.0) fit into a fraction of a microsecond, two cycles of 125
+   * ns; all that are offered suffice.
    */
   @Test
   void cyclesThatTheConverterOffers() {
@@ -107,8 +107,7 @@ class CompletionTest {
   @Test
   void aNewItemGetsItsDash() {
     Sample sample =
-        Sample.board(
-            "      - resistor: 4.7 kΩ ±1 %\n", "      - resistor: 4.7 kΩ ±1 %\n      ‸\n");
+        Sample.board("      - resistor: 4.7 kΩ ±1 %\n", "      - resistor: 4.7 kΩ ±1 %\n      ‸\n");
     assertThat(accept(sample, "capacitor")).contains("\n      - capacitor: ");
   }
 
@@ -132,8 +131,7 @@ class CompletionTest {
   void namesOfFindingsInAnAcceptance() {
     Sample sample =
         Sample.board(
-            "acquisition: 24 cycles",
-            "acquisition: 24 cycles\n    accept:\n      - finding: ‸");
+            "acquisition: 24 cycles", "acquisition: 24 cycles\n    accept:\n      - finding: ‸");
     assertThat(labels(sample)).contains("source-resistance-too-high", "filter-droop");
   }
 

@@ -7,12 +7,40 @@ import dev.settlewell.text.Span;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 
-/** Every feature on sheets as they are while somebody types: cut, doubled, swapped, half written. */
+/**
+ * Every feature on sheets as they are while somebody types: cut, doubled, swapped, half written.
+ */
 class DamagedTextTest {
   private static final int ROUNDS = 150;
   private static final String[] SCRAPS = {
-    ":", "- ", "\n", "  ", "\t", "{", "}", "[", "]", "\"", "'", "#", " # ", "|", ">", "&a", "*a",
-    "±", "😀", "\r\n", "---\n", "<<: ", "? ", "4,7 k", "\uFEFF", "\u0000", "channels:\n", "x: y: z"
+    ":",
+    "- ",
+    "\n",
+    "  ",
+    "\t",
+    "{",
+    "}",
+    "[",
+    "]",
+    "\"",
+    "'",
+    "#",
+    " # ",
+    "|",
+    ">",
+    "&a",
+    "*a",
+    "±",
+    "😀",
+    "\r\n",
+    "---\n",
+    "<<: ",
+    "? ",
+    "4,7 k",
+    "\uFEFF",
+    "\u0000",
+    "channels:\n",
+    "x: y: z"
   };
 
   private static String damaged(Random random) {
@@ -57,8 +85,7 @@ class DamagedTextTest {
       last = token.span().end();
       assertThat(last).isLessThanOrEqualTo(length);
     }
-    String formatted =
-        Sample.apply(checked.text(), Formatting.of(checked, Sample.VOCABULARY));
+    String formatted = Sample.apply(checked.text(), Formatting.of(checked, Sample.VOCABULARY));
     Checked again = Sample.check(formatted);
     assertThat(Sample.apply(again.text(), Formatting.of(again, Sample.VOCABULARY)))
         .isEqualTo(formatted);

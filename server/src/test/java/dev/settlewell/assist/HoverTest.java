@@ -19,8 +19,7 @@ class HoverTest {
 
   @Test
   void aKeyTellsWhatTheSchemaSaysOfIt() {
-    String doc =
-        Sample.VOCABULARY.kind("converter").key("clock").orElseThrow().doc();
+    String doc = Sample.VOCABULARY.kind("converter").key("clock").orElseThrow().doc();
     assertThat(hover("clock: 8", "cl‸ock: 8")).startsWith("**`clock`**").contains(doc);
   }
 
@@ -44,8 +43,8 @@ class HoverTest {
   }
 
   /**
-   * 2.5 V in 4096 steps is 0.61035 mV; code 0 at 0 V and 4095 at full scale; the ladder is 100 Ω and
-   * 4.7 kΩ with 1 % more, 4.847 kΩ.
+   * 2.5 V in 4096 steps is 0.61035 mV; code 0 at 0 V and 4095 at full scale; the ladder is 100 Ω
+   * and 4.7 kΩ with 1 % more, 4.847 kΩ.
    */
   @Test
   void aChannelTellsItsResolutionAndSettling() {
@@ -96,7 +95,10 @@ class HoverTest {
   void plainTextHasNoMarks() {
     Sample sample = Sample.board("needs: ±0.05", "ne‸eds: ±0.05");
     String plain =
-        Hover.at(sample.checked(), Sample.VOCABULARY, sample.offset()).orElseThrow().prose().plain();
+        Hover.at(sample.checked(), Sample.VOCABULARY, sample.offset())
+            .orElseThrow()
+            .prose()
+            .plain();
     assertThat(plain).startsWith("needs\n\n").doesNotContain("**").doesNotContain("`");
   }
 
@@ -107,8 +109,7 @@ class HoverTest {
     Piece root = Outline.of(checked.tree(), Sample.VOCABULARY);
     for (Piece piece : root.all().filter(p -> p.label().isPresent()).toList()) {
       Node.Scalar label = piece.label().orElseThrow();
-      Optional<Hover.Told> told =
-          Hover.at(checked, Sample.VOCABULARY, label.place().start());
+      Optional<Hover.Told> told = Hover.at(checked, Sample.VOCABULARY, label.place().start());
       assertThat(told).as(label.text()).isPresent();
       assertThat(told.get().span()).isEqualTo(label.place().span());
       assertThat(told.get().prose().markdown()).doesNotContain("|--").doesNotContain("<br");

@@ -97,7 +97,8 @@ record Sample(Checked checked, int offset) {
 
   static Checked check(String name, Map<String, String> files) {
     Linked linked =
-        Workspace.read(List.of(name), reader(files), LocalDate.of(2026, 12, 1), new Memo(VOCABULARY))
+        Workspace.read(
+                List.of(name), reader(files), LocalDate.of(2026, 12, 1), new Memo(VOCABULARY))
             .find(name)
             .orElseThrow();
     Analysis analysis = Analyzer.analyze(linked);

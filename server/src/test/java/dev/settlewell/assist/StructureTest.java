@@ -59,21 +59,16 @@ class StructureTest {
     Checked checked =
         Sample.check("# one\n# two\nchannel-sheet: 1\nsupplies:\n  a: 1 V\n  b: 2 V\n\nscans:\n");
     assertThat(Folding.of(checked, Sample.VOCABULARY))
-        .containsExactlyInAnyOrder(
-            new Folding.Fold(0, 1, true), new Folding.Fold(3, 5, false));
+        .containsExactlyInAnyOrder(new Folding.Fold(0, 1, true), new Folding.Fold(3, 5, false));
   }
 
   @Test
   void selectionsGrow() {
     Sample sample = Sample.board("100 Ω}", "10‸0 Ω}");
-    List<Span> spans =
-        Selections.around(sample.checked(), Sample.VOCABULARY, sample.offset());
+    List<Span> spans = Selections.around(sample.checked(), Sample.VOCABULARY, sample.offset());
     assertThat(spans.stream().map(sample.checked().text()::slice).limit(4))
         .containsExactly(
-            "100 Ω",
-            "resistance: 100 Ω",
-            "{resistance: 100 Ω}",
-            "voltage: {resistance: 100 Ω}");
+            "100 Ω", "resistance: 100 Ω", "{resistance: 100 Ω}", "voltage: {resistance: 100 Ω}");
     for (int i = 1; i < spans.size(); i++) {
       assertThat(spans.get(i).contains(spans.get(i - 1))).isTrue();
     }
@@ -89,8 +84,7 @@ class StructureTest {
                 + "firmware:\n  - {constant: A, in: ../src/a.h, equals: x.lsb}\n");
     assertThat(Links.of(checked, Sample.VOCABULARY))
         .extracting(Links.Link::target)
-        .containsExactly(
-            "/common/b.channels.yaml", "/board/parts/c.channels.yaml", "/src/a.h");
+        .containsExactly("/common/b.channels.yaml", "/board/parts/c.channels.yaml", "/src/a.h");
   }
 
   @Test
@@ -123,8 +117,7 @@ class StructureTest {
     Place definition = Navigation.definition(sample.checked(), "ref").orElseThrow();
     assertThat(sample.checked().text().content().substring(definition.start()))
         .startsWith("ref: 2.5 V");
-    assertThat(
-            Navigation.occurrences(sample.checked().sheet(), Sample.VOCABULARY, "ref", true))
+    assertThat(Navigation.occurrences(sample.checked().sheet(), Sample.VOCABULARY, "ref", true))
         .hasSize(3);
   }
 

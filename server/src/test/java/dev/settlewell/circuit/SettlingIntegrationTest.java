@@ -49,8 +49,7 @@ class SettlingIntegrationTest {
       String what, RandomCircuits.Sampled circuit, IntegratedLadder integrated) {
     double[][] expected = integrated.residuals(circuit.visits(), circuit.period());
     double[][] actual =
-        Settling.residuals(
-            circuit.ladder(), circuit.sampler(), circuit.visits(), circuit.period());
+        Settling.residuals(circuit.ladder(), circuit.sampler(), circuit.visits(), circuit.period());
     for (int i = 0; i < expected.length; i++) {
       for (int j = 0; j < expected.length; j++) {
         assertThat(actual[i][j])

@@ -60,7 +60,8 @@ class CheckCommandTest {
     assertThat(Typed.in(folder, "check", "--fail-on", "error").code()).isEqualTo(1);
     Typed wrong = Typed.in(folder, "check", "--fail-on", "fatal");
     assertThat(wrong.code()).isEqualTo(2);
-    assertThat(wrong.err()).contains("'fatal' is none of: error, warning, information, hint, never");
+    assertThat(wrong.err())
+        .contains("'fatal' is none of: error, warning, information, hint, never");
   }
 
   @Test
@@ -130,13 +131,15 @@ class CheckCommandTest {
   /** U+1F321 is one character, two units of UTF-16 and two columns of a terminal. */
   @Test
   void columnsCountCharacters() throws IOException {
-    write("wide.channels.yaml", Boards.HASTY.replace("mast: {", "mast: {about: \uD83C\uDF21, ")
-        .replace("10 Hz", "10 Ohm"));
+    write(
+        "wide.channels.yaml",
+        Boards.HASTY.replace("mast: {", "mast: {about: \uD83C\uDF21, ").replace("10 Hz", "10 Ohm"));
     assertThat(Typed.in(folder, "check", "wide.channels.yaml").out())
         .contains("wide.channels.yaml:18:45 error wrong-unit\n")
         .contains(
             "    mast: {about: \uD83C\uDF21, converter: adc, rate: 10 Ohm, order: [heater]}\n"
-                + " ".repeat(47) + "^^^\n");
+                + " ".repeat(47)
+                + "^^^\n");
   }
 
   @Test

@@ -43,8 +43,7 @@ class CompareCommandTest {
 
   @Test
   void whatIsMendedIsNoReasonToFail() {
-    Typed typed =
-        Typed.in(folder, "compare", "new/mast.channels.yaml", "old/mast.channels.yaml");
+    Typed typed = Typed.in(folder, "compare", "new/mast.channels.yaml", "old/mast.channels.yaml");
     assertThat(typed.code()).isZero();
     assertThat(typed.out()).contains("no longer found: error acquisition-too-short");
   }

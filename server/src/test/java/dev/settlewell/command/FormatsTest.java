@@ -189,8 +189,17 @@ class FormatsTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"check", "check --format=json", "check --format=sarif", "check --help",
-      "figures", "figures --format=json", "explain", "check --format=junit"})
+  @ValueSource(
+      strings = {
+        "check",
+        "check --format=json",
+        "check --format=sarif",
+        "check --help",
+        "figures",
+        "figures --format=json",
+        "explain",
+        "check --format=junit"
+      })
   void theSameBytesOnEveryMachine(String words) {
     Locale locale = Locale.getDefault();
     TimeZone zone = TimeZone.getDefault();

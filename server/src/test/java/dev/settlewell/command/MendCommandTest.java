@@ -29,8 +29,7 @@ class MendCommandTest {
         .contains("  +       - divider: {upper: 47 kΩ")
         .endsWith("1 change in 1 sheet\n");
     assertThat(Files.readString(sheet)).isEqualTo(Boards.CLEAN);
-    assertThat(Typed.in(folder, "mend", "mast.channels.yaml").out())
-        .isEqualTo("nothing to mend\n");
+    assertThat(Typed.in(folder, "mend", "mast.channels.yaml").out()).isEqualTo("nothing to mend\n");
   }
 
   @Test

@@ -37,7 +37,8 @@ class ToolTest {
     assertThat(command.err()).startsWith("settlewell: no command chek; did you mean check?\n");
     Typed option = Typed.in(folder, "check", "--formt=json");
     assertThat(option.code()).isEqualTo(2);
-    assertThat(option.err()).startsWith("settlewell: no option --formt=json; did you mean --format");
+    assertThat(option.err())
+        .startsWith("settlewell: no option --formt=json; did you mean --format");
     Typed nothing = Typed.in(folder);
     assertThat(nothing.code()).isEqualTo(2);
     assertThat(nothing.err()).startsWith("settlewell: a command is missing\n");

@@ -67,9 +67,7 @@ class WholeChainTest {
     Analysis analysis = Analyzer.analyze(TestSheets.link(text));
     for (ChannelFigures channel : analysis.channels()) {
       for (Figure figure : channel.figures().all()) {
-        figure
-            .value()
-            .ifPresent(v -> assertThat(v).as(figure.name() + "\n" + text).isFinite());
+        figure.value().ifPresent(v -> assertThat(v).as(figure.name() + "\n" + text).isFinite());
       }
     }
     List<Finding> findings = Findings.of(analysis);
@@ -81,7 +79,8 @@ class WholeChainTest {
       places.add(finding.place());
       finding.related().forEach(r -> places.add(r.place()));
       for (Place place : places) {
-        assertThat(0 <= place.start() && place.start() <= place.end() && place.end() <= text.length())
+        assertThat(
+                0 <= place.start() && place.start() <= place.end() && place.end() <= text.length())
             .as(finding.name() + " at " + place + " of " + text.length() + "\n" + text)
             .isTrue();
       }
@@ -135,8 +134,7 @@ class WholeChainTest {
         Matcher number = Pattern.compile("\\d+(\\.\\d+)?").matcher(text);
         if (number.find(at)) {
           List<String> values = List.of("0", "-1", "1e-30", "1e30", "999999999", "0.5");
-          text.replace(
-              number.start(), number.end(), values.get(random.nextInt(values.size())));
+          text.replace(number.start(), number.end(), values.get(random.nextInt(values.size())));
         }
       }
       default -> text.insert(lineStart, "  ");
@@ -220,7 +218,8 @@ class WholeChainTest {
     String own = owners.get(line);
     touched.add(own);
     if (lines.get(line - 1).startsWith("channels:")) {
-      // Without the first key its lines set the depth of all entries, and the others are too far out.
+      // Without the first key its lines set the depth of all entries, and the others are too far
+      // out.
       touched.addAll(owners.values());
     }
     if (lines.get(line).startsWith("  " + own + ":")) {

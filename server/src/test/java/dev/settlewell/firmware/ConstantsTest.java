@@ -60,7 +60,8 @@ class ConstantsTest {
   void evaluates_what_a_compiler_would(String expression, double value, double halfDigit) {
     Constant x = one("#define X " + expression + "\n");
     assertThat(x.why()).isEmpty();
-    assertThat(x.value().orElseThrow()).isCloseTo(value, within(1e-12 * Math.max(1, Math.abs(value))));
+    assertThat(x.value().orElseThrow())
+        .isCloseTo(value, within(1e-12 * Math.max(1, Math.abs(value))));
     assertThat(x.halfDigit()).isCloseTo(halfDigit, within(1e-9));
   }
 
@@ -89,8 +90,19 @@ class ConstantsTest {
   @ParameterizedTest
   @ValueSource(
       strings = {
-        "int y = X;", "if (X == 24) {}", "#define X(a) 24", "#define XY 24", "#define Y X",
-        "int X = 24;", "f(X = 24);", "const int y = X{24};", "const auto y = a + X;", "#undef X", "enum { A };", "// #define X 24", "X"
+        "int y = X;",
+        "if (X == 24) {}",
+        "#define X(a) 24",
+        "#define XY 24",
+        "#define Y X",
+        "int X = 24;",
+        "f(X = 24);",
+        "const int y = X{24};",
+        "const auto y = a + X;",
+        "#undef X",
+        "enum { A };",
+        "// #define X 24",
+        "X"
       })
   void takes_no_use_for_a_definition(String source) {
     assertThat(find(source)).isEmpty();
@@ -100,7 +112,8 @@ class ConstantsTest {
   @ValueSource(
       strings = {
         "#define X", "#define X read()", "#define X Y", "#define X X", "#define X A\n#define A X",
-        "#define X 1/0", "#define X 24 ms", "#define X 12abc", "#define X (24", "#define X 1 ? 2 : 3",
+        "#define X 1/0", "#define X 24 ms", "#define X 12abc", "#define X (24",
+            "#define X 1 ? 2 : 3",
         "#define X 0xFFFFFFFFFFFFFFFF", "#define X 1 << 99", "#define X --3", "#define X 08"
       })
   void says_why_an_expression_has_no_value(String source) {

@@ -46,9 +46,7 @@ final class FakeClient implements AutoCloseable {
       Pipe out = Pipe.open();
       toServer = Channels.newOutputStream(in.sink());
       InputStream fromServer = new BufferedInputStream(Channels.newInputStream(out.source()));
-      start(
-          "server",
-          () -> serve(Channels.newInputStream(in.source()), out.sink(), desk));
+      start("server", () -> serve(Channels.newInputStream(in.source()), out.sink(), desk));
       start("client", () -> collect(fromServer));
     } catch (IOException e) {
       throw new AssertionError(e);
@@ -158,8 +156,7 @@ final class FakeClient implements AutoCloseable {
 
   /** The next notification or request of this method. */
   JsonObject said(String method) {
-    return await(
-        method, m -> m.has("method") && m.get("method").getAsString().equals(method));
+    return await(method, m -> m.has("method") && m.get("method").getAsString().equals(method));
   }
 
   JsonObject await(String what, Predicate<JsonObject> wanted) {

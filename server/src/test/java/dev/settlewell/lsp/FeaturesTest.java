@@ -15,7 +15,9 @@ import java.util.Map;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.Timeout;
 
-/** Every feature through the protocol, for a client that can nothing and one that can everything. */
+/**
+ * Every feature through the protocol, for a client that can nothing and one that can everything.
+ */
 @Timeout(120)
 class FeaturesTest {
   private static final String URI = "file:///board/a.channels.yaml";
@@ -203,7 +205,8 @@ class FeaturesTest {
         assertThat(text(list)).contains("\"label\":\"capacitor\"");
         JsonElement cycles = client.ask("textDocument/completion", at("13 cycles"));
         assertThat(text(cycles)).contains("\"newText\":\"12 cycles\"").doesNotContain("${");
-        JsonObject first = cycles.getAsJsonObject().getAsJsonArray("items").get(0).getAsJsonObject();
+        JsonObject first =
+            cycles.getAsJsonObject().getAsJsonArray("items").get(0).getAsJsonObject();
         assertThat(first.getAsJsonObject("textEdit").has("range")).isTrue();
       }
     }
@@ -286,7 +289,8 @@ class FeaturesTest {
       client.published();
       Map<String, Object> range = new HashMap<>(Map.of("textDocument", document()));
       range.put("range", FakeClient.range(0, 0, 99, 0));
-      assertThat(text(client.ask("textDocument/inlayHint", range))).contains("needs ", "LSB 610 µV");
+      assertThat(text(client.ask("textDocument/inlayHint", range)))
+          .contains("needs ", "LSB 610 µV");
       assertThat(text(whole(client, "textDocument/codeLens"))).contains("within the needed");
       assertThat(whole(client, "textDocument/foldingRange").getAsJsonArray()).isNotEmpty();
       assertThat(whole(client, "textDocument/documentLink").getAsJsonArray()).isEmpty();
@@ -351,12 +355,22 @@ class FeaturesTest {
   /** Unknown, other and lost documents, and positions far outside, give empty answers. */
   @Test
   void nothingIsAnsweredWithAnError() {
-    List<String> uris = List.of("file:///nowhere.channels.yaml", "file:///a.yaml", "untitled:x", "");
+    List<String> uris =
+        List.of("file:///nowhere.channels.yaml", "file:///a.yaml", "untitled:x", "");
     try (FakeClient client = client(everything())) {
       client.published();
       for (String uri : uris) {
-        for (String method : List.of("hover", "completion", "definition", "documentSymbol",
-            "foldingRange", "codeLens", "documentLink", "documentHighlight", "prepareRename")) {
+        for (String method :
+            List.of(
+                "hover",
+                "completion",
+                "definition",
+                "documentSymbol",
+                "foldingRange",
+                "codeLens",
+                "documentLink",
+                "documentHighlight",
+                "prepareRename")) {
           client.ask(
               "textDocument/" + method,
               Map.of(

@@ -120,8 +120,7 @@ class LifeCycleTest {
         JsonObject result =
             client.initialize(
                 (Object)
-                    Map.of(
-                        "general", Map.of("positionEncodings", List.of("utf-7", encoding))));
+                    Map.of("general", Map.of("positionEncodings", List.of("utf-7", encoding))));
         assertThat(positionEncoding(result)).isEqualTo(encoding);
       }
     }
@@ -136,8 +135,7 @@ class LifeCycleTest {
     Map<String, ?> options = Map.of("positionEncoding", "utf-8");
     try (FakeClient client = new FakeClient(new StandIn())) {
       JsonObject result =
-          client.initializeWith(
-              Map.of("capabilities", Map.of(), "initializationOptions", options));
+          client.initializeWith(Map.of("capabilities", Map.of(), "initializationOptions", options));
       assertThat(positionEncoding(result)).isEqualTo("utf-8");
     }
     try (FakeClient client = new FakeClient(new StandIn())) {

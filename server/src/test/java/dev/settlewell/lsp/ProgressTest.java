@@ -52,7 +52,9 @@ class ProgressTest {
     if (value instanceof WorkDoneProgressBegin begin) {
       return "begin " + begin.getPercentage();
     }
-    return value instanceof WorkDoneProgressReport report ? "report " + report.getPercentage() : "end";
+    return value instanceof WorkDoneProgressReport report
+        ? "report " + report.getPercentage()
+        : "end";
   }
 
   @Test

@@ -27,7 +27,8 @@ class TextSyncTest {
   private static List<String> starts(JsonArray findings) {
     List<String> starts = new ArrayList<>();
     for (JsonElement finding : findings) {
-      JsonObject start = finding.getAsJsonObject().getAsJsonObject("range").getAsJsonObject("start");
+      JsonObject start =
+          finding.getAsJsonObject().getAsJsonObject("range").getAsJsonObject("start");
       starts.add(start.get("line").getAsInt() + ":" + start.get("character").getAsInt());
     }
     return starts;
@@ -65,9 +66,7 @@ class TextSyncTest {
       client.open(URI, "BAD");
       client.findings();
       client.change(
-          URI,
-          2,
-          Map.of("range", FakeClient.range(0, 0, 0, 0), "rangeLength", 77, "text", "  "));
+          URI, 2, Map.of("range", FakeClient.range(0, 0, 0, 0), "rangeLength", 77, "text", "  "));
       assertThat(starts(client.findings())).containsExactly("0:2");
     }
   }
@@ -188,7 +187,8 @@ class TextSyncTest {
         JsonObject published = client.published();
         int version = published.get("version").getAsInt();
         assertThat(version).isGreaterThanOrEqualTo(last);
-        assertThat(published.getAsJsonArray("diagnostics")).hasSize(version % 2 == 0 && version > 1 ? 1 : 0);
+        assertThat(published.getAsJsonArray("diagnostics"))
+            .hasSize(version % 2 == 0 && version > 1 ? 1 : 0);
         last = version;
       }
       client.ask("shutdown", Map.of());

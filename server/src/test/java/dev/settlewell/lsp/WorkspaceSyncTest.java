@@ -54,7 +54,8 @@ class WorkspaceSyncTest {
   }
 
   private static JsonObject publishedFor(FakeClient client, Path file) {
-    return client.await(
+    return client
+        .await(
             "findings of " + file,
             m ->
                 m.has("params")

@@ -9,8 +9,8 @@ import dev.settlewell.channel.Figure;
 import dev.settlewell.sheet.Part;
 import dev.settlewell.sheet.Slot;
 import dev.settlewell.vocabulary.Vocabulary;
-import dev.settlewell.workspace.DiskReader;
 import dev.settlewell.workspace.Discovery;
+import dev.settlewell.workspace.DiskReader;
 import dev.settlewell.workspace.Memo;
 import dev.settlewell.workspace.Workspace;
 import java.io.IOException;
@@ -60,14 +60,10 @@ class FiguresPageTest {
   private static Map<String, String> computed() {
     List<Path> folders =
         List.of(ROOT.resolve("samples"), Path.of("src/test/resources/dev/settlewell/sheet"));
-    List<String> sheets =
-        Discovery.below(folders).sheets().stream().map(Path::toString).toList();
+    List<String> sheets = Discovery.below(folders).sheets().stream().map(Path::toString).toList();
     Workspace workspace =
         Workspace.read(
-            sheets,
-            new DiskReader(ROOT),
-            LocalDate.of(2026, 12, 1),
-            new Memo(Vocabulary.load()));
+            sheets, new DiskReader(ROOT), LocalDate.of(2026, 12, 1), new Memo(Vocabulary.load()));
     Map<String, String> units = new LinkedHashMap<>();
     workspace.sheets().values().forEach(linked -> add(Analyzer.analyze(linked), units));
     return units;

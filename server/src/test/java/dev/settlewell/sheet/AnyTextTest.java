@@ -14,9 +14,43 @@ import org.junit.jupiter.api.Test;
 class AnyTextTest {
   private static final String SEED = System.getProperty("seed", "20261201");
   private static final String[] PIECES = {
-    ":", "-", "{", "}", "[", "]", ",", "#", "'", "\"", "\n", "  ", "\t", "&a", "*a", "!x", "|", ">",
-    "0", "±", "µ", "Ω", "\u2028", "\uD83D\uDE00", "\uD83D", "~", "null", "1e999", "NaN", "k=2",
-    " to ", " of ", "%", "\u0000", "? ", "---\n", "<<: *a\n"
+    ":",
+    "-",
+    "{",
+    "}",
+    "[",
+    "]",
+    ",",
+    "#",
+    "'",
+    "\"",
+    "\n",
+    "  ",
+    "\t",
+    "&a",
+    "*a",
+    "!x",
+    "|",
+    ">",
+    "0",
+    "±",
+    "µ",
+    "Ω",
+    "\u2028",
+    "\uD83D\uDE00",
+    "\uD83D",
+    "~",
+    "null",
+    "1e999",
+    "NaN",
+    "k=2",
+    " to ",
+    " of ",
+    "%",
+    "\u0000",
+    "? ",
+    "---\n",
+    "<<: *a\n"
   };
 
   @Test

@@ -41,8 +41,7 @@ class ProblemsTest {
   private static List<Problem> problems(String text) {
     Sheet sheet = Bound.sheet(text);
     Linked linked =
-        Link.link(
-            sheet, List.of(), true, List.of(), Bound.VOCABULARY, LocalDate.of(2026, 12, 1));
+        Link.link(sheet, List.of(), true, List.of(), Bound.VOCABULARY, LocalDate.of(2026, 12, 1));
     return Stream.of(sheet.tree().problems(), sheet.problems(), linked.problems())
         .flatMap(List::stream)
         .sorted(Comparator.comparingInt(problem -> problem.place().start()))
@@ -56,12 +55,14 @@ class ProblemsTest {
 
   private static void compare(Case c) {
     Sheet sheet = Bound.sheet(c.text());
-    List<String> shown = problems(c.text()).stream().map(p -> Bound.shown(sheet.text(), p)).toList();
+    List<String> shown =
+        problems(c.text()).stream().map(p -> Bound.shown(sheet.text(), p)).toList();
     assertThat(shown).hasSameSizeAs(c.expected());
     for (String expected : c.expected()) {
       assertThat(shown)
           .as(expected)
-          .anyMatch(line -> expected.endsWith("›") ? line.startsWith(expected) : line.equals(expected));
+          .anyMatch(
+              line -> expected.endsWith("›") ? line.startsWith(expected) : line.equals(expected));
     }
   }
 
@@ -77,8 +78,7 @@ class ProblemsTest {
         List<Problem> after = problems(applied(text, fix));
         assertThat(after.stream().filter(p -> p.message().equals(problem.message())).count())
             .as("%s mends: %s", fix.title(), problem.message())
-            .isLessThan(
-                before.stream().filter(p -> p.message().equals(problem.message())).count());
+            .isLessThan(before.stream().filter(p -> p.message().equals(problem.message())).count());
         if (fix.safe()) {
           assertThat(after).as(fix.title()).hasSizeLessThan(before.size());
         }
@@ -91,8 +91,7 @@ class ProblemsTest {
     fix.edits().stream()
         .sorted(Comparator.comparingInt((Edit edit) -> edit.place().start()).reversed())
         .forEach(
-            edit ->
-                changed.replace(edit.place().start(), edit.place().end(), edit.replacement()));
+            edit -> changed.replace(edit.place().start(), edit.place().end(), edit.replacement()));
     return changed.toString();
   }
 }

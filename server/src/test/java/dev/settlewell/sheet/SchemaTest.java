@@ -28,7 +28,9 @@ import org.yaml.snakeyaml.LoaderOptions;
 import org.yaml.snakeyaml.Yaml;
 import org.yaml.snakeyaml.constructor.SafeConstructor;
 
-/** The schema by itself, as editors without the server use it, against a validator of its standard. */
+/**
+ * The schema by itself, as editors without the server use it, against a validator of its standard.
+ */
 class SchemaTest {
   private static final String SCHEMA =
       Bound.resource("/dev/settlewell/schema/channels.schema.json");
@@ -38,8 +40,7 @@ class SchemaTest {
   @Test
   void is_valid_by_its_own_metaschema() {
     Schema meta =
-        REGISTRY.getSchema(
-            SchemaLocation.of(SpecificationVersion.DRAFT_2020_12.getDialectId()));
+        REGISTRY.getSchema(SchemaLocation.of(SpecificationVersion.DRAFT_2020_12.getDialectId()));
     assertThat(meta.validate(SCHEMA, InputFormat.JSON)).isEmpty();
   }
 
@@ -124,8 +125,15 @@ class SchemaTest {
   void examples_of_kinds_bind_as_they_stand() {
     for (Kind kind : Bound.VOCABULARY.kinds().values()) {
       for (String example : kind.examples()) {
-        boolean stage = Bound.VOCABULARY.kind("channel").keys().get("path").item().orElseThrow()
-            .kinds().contains(kind.name());
+        boolean stage =
+            Bound.VOCABULARY
+                .kind("channel")
+                .keys()
+                .get("path")
+                .item()
+                .orElseThrow()
+                .kinds()
+                .contains(kind.name());
         if (kind.name().equals("long-form")) {
           continue;
         }

@@ -54,8 +54,7 @@ class WholeSheetTest {
 
   private static void walk(Object value, Map<String, Set<String>> stated, List<String> wrong) {
     if (value instanceof Part part) {
-      assertThat(part.slots().keySet())
-          .isEqualTo(slotsOf(Bound.VOCABULARY.kind(part.kind())));
+      assertThat(part.slots().keySet()).isEqualTo(slotsOf(Bound.VOCABULARY.kind(part.kind())));
       part.slots()
           .forEach(
               (key, slot) -> {
@@ -91,7 +90,13 @@ class WholeSheetTest {
   }
 
   private Part stage(String channel, int index) {
-    return channel(channel).list("path", Part.class).stated().orElseThrow().get(index).stated().orElseThrow();
+    return channel(channel)
+        .list("path", Part.class)
+        .stated()
+        .orElseThrow()
+        .get(index)
+        .stated()
+        .orElseThrow();
   }
 
   private Part converter(String name) {
@@ -100,12 +105,18 @@ class WholeSheetTest {
 
   @Test
   void a_word_or_a_quantity() {
-    assertThat(converter("sampler").either("reference").stated().orElseThrow().word()).contains("ref");
+    assertThat(converter("sampler").either("reference").stated().orElseThrow().word())
+        .contains("ref");
     Either voltage = converter("slow").either("reference").stated().orElseThrow();
     assertThat(voltage.word()).isEmpty();
     assertThat(voltage.quantity().orElseThrow().value()).isEqualTo(2.5);
     Toleranced share =
-        converter("sampler").either("hold-starts-at").stated().orElseThrow().quantity().orElseThrow();
+        converter("sampler")
+            .either("hold-starts-at")
+            .stated()
+            .orElseThrow()
+            .quantity()
+            .orElseThrow();
     assertThat(share.value()).isEqualTo(0.5);
     assertThat(share.of()).contains("ref");
     assertThat(converter("slow").either("hold-starts-at").stated().orElseThrow().is("unknown"))
@@ -180,15 +191,35 @@ class WholeSheetTest {
         .isCloseTo(19.953, within(0.001)); // 26 dB
     assertThat(channel("cell").part("sensor").stated().orElseThrow().kind()).isEqualTo("voltage");
     List<Slot<Part>> points =
-        channel("tank").part("sensor").stated().orElseThrow().list("points", Part.class).stated().orElseThrow();
-    assertThat(points.get(1).stated().orElseThrow().quantity("output").stated().orElseThrow().value())
+        channel("tank")
+            .part("sensor")
+            .stated()
+            .orElseThrow()
+            .list("points", Part.class)
+            .stated()
+            .orElseThrow();
+    assertThat(
+            points.get(1).stated().orElseThrow().quantity("output").stated().orElseThrow().value())
         .isEqualTo(0.9);
-    assertThat(channel("oil").part("calibrated").stated().orElseThrow().list("terms", String.class)
-            .stated().orElseThrow())
+    assertThat(
+            channel("oil")
+                .part("calibrated")
+                .stated()
+                .orElseThrow()
+                .list("terms", String.class)
+                .stated()
+                .orElseThrow())
         .extracting(slot -> slot.stated().orElseThrow())
         .containsExactly("offset", "gain");
-    assertThat(channel("bore").part("band").stated().orElseThrow().quantity("frequency").stated()
-            .orElseThrow().value())
+    assertThat(
+            channel("bore")
+                .part("band")
+                .stated()
+                .orElseThrow()
+                .quantity("frequency")
+                .stated()
+                .orElseThrow()
+                .value())
         .isEqualTo(1);
   }
 
@@ -199,8 +230,10 @@ class WholeSheetTest {
         .containsExactly("2", "3");
     assertThat(channel("ram").text("pin").stated()).contains("PA3");
     assertThat(channel("oil").text("pin").stated()).contains("4");
-    assertThat(channel("oil").range("measures").stated().orElseThrow().unit().symbol()).isEqualTo("bar");
+    assertThat(channel("oil").range("measures").stated().orElseThrow().unit().symbol())
+        .isEqualTo("bar");
     // The sheet's own unit is the metre; 300 mm is 0.3 of it.
-    assertThat(channel("ram").range("measures").stated().orElseThrow().high()).isCloseTo(0.3, within(1e-15));
+    assertThat(channel("ram").range("measures").stated().orElseThrow().high())
+        .isCloseTo(0.3, within(1e-15));
   }
 }

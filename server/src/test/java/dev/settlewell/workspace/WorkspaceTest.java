@@ -53,7 +53,8 @@ class WorkspaceTest {
     assertThat(a.supplies()).containsOnlyKeys("ref");
     assertThat(a.converters()).containsOnlyKeys("adc");
     assertThat(a.interferers()).containsOnlyKeys("mains");
-    assertThat(a.used()).extracting(sheet -> sheet.path())
+    assertThat(a.used())
+        .extracting(sheet -> sheet.path())
         .containsExactly("/w/b/b.channels.yaml", "/w/b/c.channels.yaml");
   }
 
@@ -64,10 +65,15 @@ class WorkspaceTest {
         .with("/out.channels.yaml", HEAD)
         .with("/w/a/a.channels.yaml", HEAD + "use: [../../out.channels.yaml]\n");
     assertThat(problems("/w/a/a.channels.yaml"))
-        .singleElement().asString().startsWith("USE_OUTSIDE_WORKSPACE");
+        .singleElement()
+        .asString()
+        .startsWith("USE_OUTSIDE_WORKSPACE");
     files.with("/.settlewell.yaml", "");
     assertThat(problems("/w/a/a.channels.yaml"))
-        .as("the nearest mark decides").singleElement().asString().startsWith("USE_OUTSIDE");
+        .as("the nearest mark decides")
+        .singleElement()
+        .asString()
+        .startsWith("USE_OUTSIDE");
     files.files.remove("/w/.git/HEAD");
     assertThat(problems("/w/a/a.channels.yaml")).isEmpty();
   }
@@ -79,7 +85,9 @@ class WorkspaceTest {
         .with("/w/a/sub/c.channels.yaml", HEAD)
         .with("/w/a/a.channels.yaml", HEAD + "use: [../b.channels.yaml, sub/c.channels.yaml]\n");
     assertThat(problems("/w/a/a.channels.yaml"))
-        .singleElement().asString().startsWith("USE_OUTSIDE_WORKSPACE `../b.channels.yaml`");
+        .singleElement()
+        .asString()
+        .startsWith("USE_OUTSIDE_WORKSPACE `../b.channels.yaml`");
   }
 
   @Test
@@ -107,7 +115,10 @@ class WorkspaceTest {
         .containsExactly(
             "USE_CIRCLE sheets may not use each other in a circle: a.channels.yaml uses"
                 + " b.channels.yaml, which uses c.channels.yaml, which uses a.channels.yaml");
-    assertThat(problems("/w/self.channels.yaml")).singleElement().asString().startsWith("USE_CIRCLE");
+    assertThat(problems("/w/self.channels.yaml"))
+        .singleElement()
+        .asString()
+        .startsWith("USE_CIRCLE");
   }
 
   @Test
@@ -148,8 +159,16 @@ class WorkspaceTest {
     assertThat(after.find(all[0]).orElseThrow().sheet())
         .isSameAs(before.find(all[0]).orElseThrow().sheet());
     assertThat(after.find(all[2])).containsSame(before.find(all[2]).orElseThrow());
-    assertThat(after.find(all[0]).orElseThrow().supplies().get("ref").value().stated().orElseThrow()
-            .value())
+    assertThat(
+            after
+                .find(all[0])
+                .orElseThrow()
+                .supplies()
+                .get("ref")
+                .value()
+                .stated()
+                .orElseThrow()
+                .value())
         .isEqualTo(2);
   }
 
@@ -173,8 +192,7 @@ class WorkspaceTest {
     write(folder.resolve("b/b.channels.yaml"), HEAD + "use: [../a/a.channels.yaml]\n");
     write(folder.resolve("a/a.channels.yaml"), HEAD + "use: [../b/b.channels.yaml, none.yaml]\n");
     Workspace workspace =
-        Workspace.read(
-            List.of("a.channels.yaml"), new DiskReader(folder.resolve("a")), DAY, memo);
+        Workspace.read(List.of("a.channels.yaml"), new DiskReader(folder.resolve("a")), DAY, memo);
     Linked a = workspace.find("a.channels.yaml").orElseThrow();
     assertThat(kinds(a))
         .containsExactlyInAnyOrder(Problem.Kind.USE_CIRCLE, Problem.Kind.USE_NOT_FOUND);
@@ -237,8 +255,13 @@ class WorkspaceTest {
   void discovery_skips_what_is_hidden_built_or_fetched(@TempDir Path folder) throws IOException {
     for (String path :
         List.of(
-            "z.channels.yaml", "a/b.channels.yaml", "a/plain.yaml", ".git/x.channels.yaml",
-            "target/x.channels.yaml", "web/node_modules/p/x.channels.yaml", ".channels.yaml")) {
+            "z.channels.yaml",
+            "a/b.channels.yaml",
+            "a/plain.yaml",
+            ".git/x.channels.yaml",
+            "target/x.channels.yaml",
+            "web/node_modules/p/x.channels.yaml",
+            ".channels.yaml")) {
       write(folder.resolve(path), HEAD);
     }
     Discovery found = Discovery.below(List.of(folder, folder.resolve("a/plain.yaml")));

@@ -5,7 +5,9 @@ import dev.settlewell.finding.Finding;
 import dev.settlewell.finding.Severity;
 import java.util.function.Consumer;
 
-/** An amplifier drives less impedance than its own: beyond the model, and often beyond stability. */
+/**
+ * An amplifier drives less impedance than its own: beyond the model, and often beyond stability.
+ */
 final class AmplifierLoadTooLow extends ChannelCheck {
   @Override
   public String name() {

@@ -33,8 +33,8 @@ final class AveragingWithoutDither extends ChannelCheck {
         FindingBuilder.of(this, channel, "average")
             .message(
                 ("with %s of noise the mean keeps a bias of %s rms, more than the %s that averaging"
-                     + " leaves; about 0.5 LSB of noise in front of the converter would let it"
-                     + " work")
+                        + " leaves; about 0.5 LSB of noise in front of the converter would let it"
+                        + " work")
                     .formatted(
                         Words.lsb(channel.number("noise-lsb")), Words.lsb(bias), Words.lsb(rest)))
             .need("at most " + Words.lsb(rest))

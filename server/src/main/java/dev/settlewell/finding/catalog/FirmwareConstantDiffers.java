@@ -52,14 +52,22 @@ final class FirmwareConstantDiffers implements Check {
     if (Math.abs(written - wanted) <= room) {
       return;
     }
-    String figure = claim.figure() + (claim.times() == 1 ? "" : " times " + Words.count(claim.times()));
+    String figure =
+        claim.figure() + (claim.times() == 1 ? "" : " times " + Words.count(claim.times()));
     String inUnit = unit.isEmpty() || unit.equals("1") ? "" : " " + unit;
     report.accept(
         FindingBuilder.of(this, claim.constant().place(), claim.subject())
             .about(claim.name())
             .message(
-                claim.name() + " is " + Words.count(written) + " in the code, and " + figure + " is "
-                    + Words.count(wanted) + inUnit + ": change the one that is wrong")
+                claim.name()
+                    + " is "
+                    + Words.count(written)
+                    + " in the code, and "
+                    + figure
+                    + " is "
+                    + Words.count(wanted)
+                    + inUnit
+                    + ": change the one that is wrong")
             .have(Words.count(written))
             .need(Words.count(wanted))
             .related(constant.place(), claim.name() + " in the code")

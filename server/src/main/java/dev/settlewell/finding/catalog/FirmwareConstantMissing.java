@@ -35,7 +35,8 @@ final class FirmwareConstantMissing implements Check {
             finding(
                 claim,
                 claim.equalTo(),
-                "nothing computed or stated is named " + claim.figure()
+                "nothing computed or stated is named "
+                    + claim.figure()
                     + ": write CHANNEL.FIGURE, SCAN.CHANNEL.FIGURE or CONVERTER.KEY"));
       }
       claim.source().ifPresent(source -> look(claim, source, report));
@@ -46,7 +47,10 @@ final class FirmwareConstantMissing implements Check {
     String file = claim.in().stated().orElseThrow();
     if (source.text().isEmpty()) {
       report.accept(
-          finding(claim, claim.in(), claim.name() + " cannot be compared: " + file + ": " + source.why()));
+          finding(
+              claim,
+              claim.in(),
+              claim.name() + " cannot be compared: " + file + ": " + source.why()));
       return;
     }
     List<Constant> definitions = claim.definitions();
@@ -55,7 +59,9 @@ final class FirmwareConstantMissing implements Check {
           finding(
               claim,
               claim.constant(),
-              claim.name() + " is not defined in " + file
+              claim.name()
+                  + " is not defined in "
+                  + file
                   + ": no #define, const, constexpr or enum of that name"));
     }
     for (Constant constant : definitions) {
@@ -64,7 +70,11 @@ final class FirmwareConstantMissing implements Check {
             FindingBuilder.of(this, claim.constant().place(), claim.subject())
                 .about(claim.name())
                 .message(
-                    claim.name() + " in " + file + " is no expression of literals: " + constant.why())
+                    claim.name()
+                        + " in "
+                        + file
+                        + " is no expression of literals: "
+                        + constant.why())
                 .related(constant.place(), claim.name() + " in the code")
                 .build());
       }

@@ -11,8 +11,8 @@ import java.util.Map;
 import java.util.Optional;
 
 /**
- * Reads the frames of the LSP base protocol, with bounds on everything a peer chooses: the length of
- * a header, of a body, and the depth of its nesting.
+ * Reads the frames of the LSP base protocol, with bounds on everything a peer chooses: the length
+ * of a header, of a body, and the depth of its nesting.
  *
  * <p>A frame that is whole but too much is skipped; a header that makes no sense is {@link
  * BrokenFraming}, for then nobody knows where the next message begins.

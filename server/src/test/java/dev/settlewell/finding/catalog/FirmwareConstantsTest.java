@@ -64,10 +64,8 @@ class FirmwareConstantsTest {
         "slow.other.level.lsb; 1; 1; firmware-constant-missing",
         "level.average; 1; read(); firmware-constant-missing"
       })
-  void compares_to_half_the_last_digit(
-      String figure, String times, String code, String expected) {
-    String entry =
-        "{constant: X, in: a.h, equals: %s, times: %s}".formatted(figure, times);
+  void compares_to_half_the_last_digit(String figure, String times, String code, String expected) {
+    String entry = "{constant: X, in: a.h, equals: %s, times: %s}".formatted(figure, times);
     Source source = Source.of(SourceText.of("a.h", "#define X " + code + "\n"));
     List<String> names = names(SHEET.formatted(entry), Map.of("a.h", source));
     String wanted = expected.replace("'", "");
@@ -87,8 +85,7 @@ class FirmwareConstantsTest {
   }
 
   private static List<String> names(String text, Map<String, Source> sources) {
-    Sheet sheet =
-        Sheets.bind(Syntax.parse(SourceText.of("t.channels.yaml", text)), VOCABULARY);
+    Sheet sheet = Sheets.bind(Syntax.parse(SourceText.of("t.channels.yaml", text)), VOCABULARY);
     assertThat(sheet.problems()).isEmpty();
     Linked linked =
         Link.link(sheet, List.of(), true, List.of(), VOCABULARY, LocalDate.of(2026, 12, 1))

@@ -52,7 +52,8 @@ class FrameReaderTest {
   @Test
   void decodesACharsetThatIsNamed() throws IOException {
     Charset latin = StandardCharsets.ISO_8859_1;
-    byte[] frame = "Content-Length: 3\r\nContent-Type: x; charset=latin1\r\n\r\n\"±\"".getBytes(latin);
+    byte[] frame =
+        "Content-Length: 3\r\nContent-Type: x; charset=latin1\r\n\r\n\"±\"".getBytes(latin);
     assertThat(reader(frame).next()).contains(new Frame.Body("\"±\""));
   }
 
