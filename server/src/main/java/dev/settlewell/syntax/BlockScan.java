@@ -48,7 +48,7 @@ final class BlockScan {
       }
     }
     for (Level.Mend mend : mends) {
-      Fix fix = new Fix("Level.Mend the indentation", mend.edits, false);
+      Fix fix = new Fix("Mend the indentation", mend.edits, false);
       mending.problems.add(
           new Problem(Problem.Kind.SYNTAX, mending.text.place(mend.span), mend.message, fix));
     }
