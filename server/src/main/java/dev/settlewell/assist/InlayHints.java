@@ -1,15 +1,19 @@
 package dev.settlewell.assist;
 
+import dev.settlewell.channel.Alias;
 import dev.settlewell.channel.Budget;
 import dev.settlewell.channel.ChannelFigures;
 import dev.settlewell.channel.Figures;
 import dev.settlewell.channel.ScanFigures;
+import dev.settlewell.text.Place;
 import dev.settlewell.text.Span;
 import dev.settlewell.unit.Engineering;
 import dev.settlewell.vocabulary.Key;
 import dev.settlewell.vocabulary.Vocabulary;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
@@ -22,13 +26,20 @@ public final class InlayHints {
     /** What is needed, beside {@code acquisition}; a scan's load beside its {@code rate}. */
     ACQUISITION,
     /** The error, beside {@code needs}; the voltage, beside the name of a supply. */
-    VALUES
+    VALUES,
+    /** Where the strongest line of an interferer lands, beside its name in a channel. */
+    INTERFERERS,
+    /** The share of the error budget, beside each value of a channel that has a part in it. */
+    SHARES
   }
 
   /**
    * @param offset behind which it stands
    */
   public record Hint(int offset, String text, Sort sort) {}
+
+  /** A smaller share is not worth the room beside a value. */
+  private static final double LEAST_SHARE = 0.01;
 
   private final Checked checked;
   private final List<Hint> hints = new ArrayList<>();
@@ -43,6 +54,10 @@ public final class InlayHints {
         .all()
         .filter(piece -> piece.span().start() <= range.end() && range.start() <= piece.span().end())
         .forEach(all::piece);
+    checked.linked().sheet().channels().keySet().stream()
+        .map(name -> checked.analysis().of(name))
+        .filter(figures -> figures.size() == 1)
+        .forEach(figures -> all.parts(figures.get(0)));
     return all.hints.stream().filter(hint -> range.touches(hint.offset())).toList();
   }
 
@@ -81,7 +96,51 @@ public final class InlayHints {
   }
 
   private static String budget(Budget budget) {
-    return "has ±" + Engineering.message(budget.judged(), budget.unit());
+    String has = "has ±" + Engineering.message(budget.judged(), budget.unit());
+    OptionalDouble margin = budget.margin();
+    return margin.isPresent()
+        ? has + ", margin " + Engineering.message(margin.getAsDouble(), budget.unit())
+        : has;
+  }
+
+  /** What the parts of a channel do to its readings. */
+  private void parts(ChannelFigures channel) {
+    Map<Place, Alias> strongest = new LinkedHashMap<>();
+    for (Alias alias : channel.aliases()) {
+      strongest.merge(alias.place(), alias, (a, b) -> a.amplitudeLsb() >= b.amplitudeLsb() ? a : b);
+    }
+    strongest.forEach((place, alias) -> add(channel, place, landing(alias), Sort.INTERFERERS));
+    Map<Place, Double> shares = new LinkedHashMap<>();
+    channel.budget().stream()
+        .flatMap(budget -> budget.rows().stream())
+        .filter(row -> !row.name().startsWith("interferer-") && !row.name().equals("settling"))
+        .forEach(
+            row -> row.places().forEach(place -> shares.merge(place, row.share(), Double::sum)));
+    shares.forEach(
+        (place, share) -> {
+          if (share >= LEAST_SHARE) {
+            String text = Engineering.message(share, "1") + " of the error";
+            add(channel, place, text, Sort.SHARES);
+          }
+        });
+  }
+
+  private static String landing(Alias alias) {
+    String where =
+        alias.landsHigh() - alias.landsLow() < 1e-9 * alias.landsHigh()
+            ? Engineering.message(alias.landsHigh(), "Hz")
+            : Engineering.message(alias.landsLow(), "Hz")
+                + " to "
+                + Engineering.message(alias.landsHigh(), "Hz");
+    return "lands at " + where + ", " + Engineering.message(alias.amplitudeLsb(), "LSB");
+  }
+
+  /** Only values of the channel's own block: those of a converter serve several channels. */
+  private void add(ChannelFigures channel, Place place, String text, Sort sort) {
+    Place block = channel.channel().value().place();
+    if (place.sheet().equals(block.sheet()) && block.span().contains(place.span())) {
+      hints.add(new Hint(place.end(), text, sort));
+    }
   }
 
   private void scan(Piece piece, ScanFigures scan) {

@@ -41,6 +41,8 @@ final class HintFeature implements Feature {
       case RESOLUTION -> settings.hintResolution();
       case ACQUISITION -> settings.hintAcquisition();
       case VALUES -> settings.hintValues();
+      case INTERFERERS -> settings.hintInterferers();
+      case SHARES -> settings.hintShares();
     };
   }
 

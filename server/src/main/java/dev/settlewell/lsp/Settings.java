@@ -16,13 +16,23 @@ record Settings(
     boolean codeLens,
     boolean hintResolution,
     boolean hintAcquisition,
-    boolean hintValues) {
+    boolean hintValues,
+    boolean hintInterferers,
+    boolean hintShares) {
 
   static final String SECTION = "settlewell";
-  static final Settings DEFAULT = new Settings("", true, true, true, true, true);
+  static final Settings DEFAULT = new Settings("", true, true, true, true, true, true, true);
 
   Settings withDocumentation(String url) {
-    return new Settings(url, unopenedSheets, codeLens, hintResolution, hintAcquisition, hintValues);
+    return new Settings(
+        url,
+        unopenedSheets,
+        codeLens,
+        hintResolution,
+        hintAcquisition,
+        hintValues,
+        hintInterferers,
+        hintShares);
   }
 
   /**
@@ -47,7 +57,9 @@ record Settings(
         flag(given, "codeLens").orElse(codeLens),
         flag(hints, "resolution").orElse(hintResolution),
         flag(hints, "acquisition").orElse(hintAcquisition),
-        flag(hints, "values").orElse(hintValues));
+        flag(hints, "values").orElse(hintValues),
+        flag(hints, "interferers").orElse(hintInterferers),
+        flag(hints, "shares").orElse(hintShares));
   }
 
   private static Optional<Boolean> flag(JsonObject object, String key) {

@@ -152,6 +152,9 @@ class StructureTest {
     assertThat(hints).extracting(InlayHints.Hint::text).anyMatch(t -> t.startsWith("LSB 610 µV"));
     assertThat(hints).extracting(InlayHints.Hint::text).contains("2.5 V", "3.3 V");
     assertThat(hints).extracting(InlayHints.Hint::text).anyMatch(t -> t.startsWith("needs "));
+    assertThat(hints).extracting(InlayHints.Hint::text).anyMatch(t -> t.contains(", margin "));
+    assertThat(hints).extracting(InlayHints.Hint::text).anyMatch(t -> t.endsWith(" of the error"));
+    assertThat(hints).extracting(InlayHints.Hint::text).anyMatch(t -> t.startsWith("lands at "));
     int bits = BOARD.text().content().indexOf("bits");
     assertThat(InlayHints.of(BOARD, Sample.VOCABULARY, new Span(bits, bits + 4))).isEmpty();
   }
