@@ -93,7 +93,7 @@ final class Lists {
                   ? "the outputs of all points must have one unit"
                   : step == 0 || step * direction < 0
                       ? "the outputs must rise or fall from point to point, else one output has two"
-                            + " values"
+                          + " values"
                       : null;
       if (fault != null) {
         report.add(Problem.Kind.VALUE_OUT_OF_RANGE, here.place(), fault);
